@@ -1,0 +1,39 @@
+import { z } from 'zod';
+
+export const limitMethod = z.enum(['normal', 'lots', 'order', 'sigma']);
+export type LimitMethod = z.infer<typeof limitMethod>;
+
+/** The step a printed limit is rounded to: so many units of the table, or significant figures. */
+export const resolution = z.union([
+	z.object({ step: z.number().positive() }),
+	z.object({ significantFigures: z.number().int().min(1).max(8) })
+]);
+export type Resolution = z.infer<typeof resolution>;
+
+/** How a limit is computed. Versioned: what uses a policy keeps the version it used. */
+export const limitPolicy = z.object({
+	name: z.string().min(1).max(80),
+	method: limitMethod,
+	/** P: the share of devices promised to lie on the right side. */
+	content: z.number().gt(0).lt(1),
+	/** γ: how sure the promise is. */
+	confidence: z.number().gt(0).lt(1),
+	/** Each limit on its own (confidence shared when both are promised), or content between both. */
+	tails: z.enum(['each', 'both']),
+	/** Multiples of the standard deviation, for `sigma` only. */
+	k: z.number().positive().optional(),
+	minimumLots: z.number().int().min(1),
+	minimumDevices: z.number().int().min(2),
+	/** Relative drift allowance over life, outwards on each side. */
+	drift: z.number().min(0).lt(1).default(0),
+	resolution
+});
+export type LimitPolicy = z.infer<typeof limitPolicy>;
+
+/** A stored version of a policy, as limits name it. */
+export interface PolicyVersion {
+	readonly id: number;
+	readonly policy: string;
+	readonly number: number;
+	readonly rules: LimitPolicy;
+}

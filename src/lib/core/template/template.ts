@@ -1,0 +1,97 @@
+import { z } from 'zod';
+import { letterSymbol } from '../characteristics/symbol';
+
+export const PRODUCT_CLASSES = [
+	'rectifier',
+	'detector-mixer',
+	'tuning',
+	'switching',
+	'pin'
+] as const;
+export const productClass = z.enum(PRODUCT_CLASSES);
+export type ProductClass = z.infer<typeof productClass>;
+
+export const CLASS_NAMES = {
+	rectifier: 'Schottky rectifier',
+	'detector-mixer': 'Detector and mixer diode',
+	tuning: 'Tuning diode',
+	switching: 'Switching diode',
+	pin: 'PIN diode'
+} as const satisfies Record<ProductClass, string>;
+
+/** A key within a template, stable over its versions: drafts store bindings under it. */
+const key = z
+	.string()
+	.regex(/^[a-z][a-z0-9-]*(\.[a-z0-9-]+)*$/, 'expected a key like ratings.reverse-voltage');
+
+const heading = z.string().min(1).max(80);
+
+/** A limiting value somebody types: symbol, name and unit stand here, the number in the draft. */
+export const ratingSlot = z.object({
+	slot: key,
+	symbol: letterSymbol,
+	name: z.string(),
+	conditions: z.string().default(''),
+	unit: z.string(),
+	/** Which ends the rating has; a storage temperature has both. */
+	ends: z.enum(['minimum', 'maximum', 'both']),
+	essential: z.boolean()
+});
+export type RatingSlot = z.infer<typeof ratingSlot>;
+
+/** A characteristic at one condition, filled by a computed limit. */
+export const limitSlot = z.object({
+	slot: key,
+	characteristic: z.string(),
+	temperatureCelsius: z.number(),
+	frequency: z.number().positive().optional(),
+	reverseVoltage: z.number().optional(),
+	/** Which of the three must be printed for the slot to count as bound. */
+	required: z.array(z.enum(['minimum', 'typical', 'maximum'])),
+	essential: z.boolean()
+});
+export type LimitSlot = z.infer<typeof limitSlot>;
+
+/** One module a kind; datasheet.md lists what each prints. */
+export const templateSection = z.discriminatedUnion('kind', [
+	z.object({ kind: z.literal('masthead') }),
+	z.object({
+		kind: z.literal('prose'),
+		block: key,
+		heading: heading.nullable(),
+		style: z.enum(['paragraph', 'list']),
+		hint: z.string()
+	}),
+	z.object({ kind: z.literal('headline-figures'), slots: z.array(key).max(4) }),
+	z.object({ kind: z.literal('ordering'), heading }),
+	z.object({ kind: z.literal('ratings'), heading, slots: z.array(ratingSlot) }),
+	z.object({ kind: z.literal('characteristics'), heading, slots: z.array(limitSlot) }),
+	z.object({
+		kind: z.literal('capacitance-table'),
+		heading,
+		slot: key,
+		temperatureCelsius: z.number(),
+		frequency: z.number().positive(),
+		/** Biases in V; those outside the measured range stay unbound. */
+		biases: z.array(z.number().nonnegative()).min(1),
+		/** Bias the ratio column divides by; `null` leaves the column out. */
+		ratioTo: z.number().nullable(),
+		essential: z.boolean()
+	}),
+	z.object({ kind: z.literal('capacitance-chart'), heading, table: key }),
+	z.object({ kind: z.literal('revision-history'), heading }),
+	z.object({ kind: z.literal('notice'), heading })
+]);
+export type TemplateSection = z.infer<typeof templateSection>;
+
+/** A datasheet template: data, not code; one JSON file a product class. */
+export const template = z.object({
+	format: z.literal('platen-template-1'),
+	key,
+	name: z.string().min(1),
+	productClass,
+	/** Which standard asks for the essential slots, and what of that is from memory. */
+	sources: z.string(),
+	sections: z.array(templateSection).min(1)
+});
+export type Template = z.infer<typeof template>;
