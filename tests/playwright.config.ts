@@ -1,0 +1,31 @@
+import { defineConfig } from '@playwright/test';
+
+/** Browser stories on the production build, in Debian's Chromium; one worker for two cores. */
+export default defineConfig({
+	testDir: './journeys',
+	testMatch: '**/*.journey.ts',
+	outputDir: '../test-results',
+	workers: 1,
+	fullyParallel: false,
+	forbidOnly: true,
+	retries: 0,
+	timeout: 90_000,
+	expect: { timeout: 15_000 },
+	globalSetup: './journeys/setup.ts',
+	reporter: [['line'], ['json', { outputFile: '.work/playwright.json' }]],
+	use: {
+		trace: 'retain-on-failure',
+		launchOptions: {
+			executablePath: '/usr/bin/chromium',
+			args: [
+				'--no-sandbox',
+				'--disable-gpu',
+				'--disable-quic',
+				'--no-first-run',
+				'--disable-background-networking',
+				'--disable-component-update',
+				'--disable-sync'
+			]
+		}
+	}
+});
