@@ -100,7 +100,9 @@ export const documentSection = z.discriminatedUnion('kind', [
 		kind: z.literal('headline-figures'),
 		figures: z.array(
 			z.object({
+				/** `25.0`, or `23.5 to 26.6` where both ends are printed. */
 				figure: z.string(),
+				/** What follows in smaller type: `pF`, `pF typ`, `V max`. */
 				unit: z.string(),
 				label: richText,
 				basis: basis.nullable(),
@@ -192,6 +194,16 @@ export const datasheetDocument = z.object({
 	/** The terms behind each basis mark that occurs, in the order of strength. */
 	basisNotes: z.array(z.object({ basis, mark: z.string(), text: z.string() })),
 	/** Statements below the tables: typical values, rounding, what statistical limits rest on. */
-	footnotes: z.array(z.string())
+	footnotes: z.array(z.string()),
+	/** What the template asks for and this datasheet leaves out: not printed, but reviewed. */
+	omissions: z.array(
+		z.object({
+			id: z.string(),
+			slot: z.string(),
+			label: z.string(),
+			reason: z.string(),
+			by: z.string()
+		})
+	)
 });
 export type DatasheetDocument = z.infer<typeof datasheetDocument>;

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { letterSymbol } from '../characteristics/symbol';
+import { inconsistencies } from './inconsistencies';
 
 export const PRODUCT_CLASSES = [
 	'rectifier',
@@ -35,6 +36,8 @@ export const ratingSlot = z.object({
 	unit: z.string(),
 	/** Which ends the rating has; a storage temperature has both. */
 	ends: z.enum(['minimum', 'maximum', 'both']),
+	/** What it is printed in steps of; finer digits are rounded so that it claims less. */
+	step: z.number().positive().optional(),
 	essential: z.boolean()
 });
 export type RatingSlot = z.infer<typeof ratingSlot>;
@@ -42,7 +45,13 @@ export type RatingSlot = z.infer<typeof ratingSlot>;
 /** A characteristic at one condition, filled by a computed limit. */
 export const limitSlot = z.object({
 	slot: key,
+	/** Key of the characteristic, as distributions are stored under it: `C_tot`. */
 	characteristic: z.string(),
+	symbol: letterSymbol,
+	name: z.string(),
+	unit: z.string(),
+	/** Conditions beyond bias, frequency and temperature, with symbols as plain text: `I_F = 1 A`. */
+	conditions: z.string().default(''),
 	temperatureCelsius: z.number(),
 	frequency: z.number().positive().optional(),
 	reverseVoltage: z.number().optional(),
@@ -64,7 +73,13 @@ export const templateSection = z.discriminatedUnion('kind', [
 	}),
 	z.object({ kind: z.literal('headline-figures'), slots: z.array(key).max(4) }),
 	z.object({ kind: z.literal('ordering'), heading }),
-	z.object({ kind: z.literal('ratings'), heading, slots: z.array(ratingSlot) }),
+	z.object({
+		kind: z.literal('ratings'),
+		heading,
+		/** At the right of the head; the words about IEC 60134 when it is left out. */
+		note: z.string().optional(),
+		slots: z.array(ratingSlot)
+	}),
 	z.object({ kind: z.literal('characteristics'), heading, slots: z.array(limitSlot) }),
 	z.object({
 		kind: z.literal('capacitance-table'),
@@ -85,13 +100,19 @@ export const templateSection = z.discriminatedUnion('kind', [
 export type TemplateSection = z.infer<typeof templateSection>;
 
 /** A datasheet template: data, not code; one JSON file a product class. */
-export const template = z.object({
-	format: z.literal('platen-template-1'),
-	key,
-	name: z.string().min(1),
-	productClass,
-	/** Which standard asks for the essential slots, and what of that is from memory. */
-	sources: z.string(),
-	sections: z.array(templateSection).min(1)
-});
+export const template = z
+	.object({
+		format: z.literal('platen-template-1'),
+		key,
+		name: z.string().min(1),
+		productClass,
+		/** Which standard asks for the essential slots, and what of that is from memory. */
+		sources: z.string(),
+		sections: z.array(templateSection).min(1)
+	})
+	.superRefine(({ sections }, context) => {
+		for (const { path, message } of inconsistencies(sections)) {
+			context.addIssue({ code: 'custom', path: ['sections', ...path], message });
+		}
+	});
 export type Template = z.infer<typeof template>;
