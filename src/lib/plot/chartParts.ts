@@ -1,0 +1,119 @@
+import type { Field } from 'vega-lite/types_unstable/channeldef.js';
+import type { LayerSpec } from 'vega-lite/types_unstable/spec/index.js';
+import type { LetterSymbol } from '../core/characteristics/symbol';
+import type { ChartTheme, Stroke } from './chartTheme';
+import { textWidth } from './textWidth';
+
+/** One layer of a panel. */
+export type Layer = LayerSpec<Field>['layer'][number];
+
+/** A place inside a panel, from its upper left corner, in the unit of the chart. */
+export interface Place {
+	readonly x: number;
+	readonly y: number;
+}
+
+/** A piece of a label: a chart's text knows no subscripts, so that each piece is a mark of its own. */
+export interface LabelPiece {
+	readonly text: string;
+	readonly size: number;
+	readonly style: 'upright' | 'italic';
+	/** Distance below the baseline. */
+	readonly drop: number;
+}
+
+/** A mark that stands for nothing in the data has one empty row. */
+export const ONE_ROW = { values: [{}] };
+
+/** Fixed places as an encoding: a place given to the mark would lose to the panel's own channels. */
+export const fixed = (place: Place) => ({ x: { value: place.x }, y: { value: place.y } });
+
+const fixedSpan = (from: Place, to: Place) => ({
+	...fixed(from),
+	x2: { value: to.x },
+	y2: { value: to.y }
+});
+
+/** Vega's names for a stroke. */
+export const strokeMark = (stroke: Stroke) => ({
+	stroke: stroke.color,
+	strokeWidth: stroke.width,
+	...(stroke.dash && { strokeDash: [...stroke.dash] })
+});
+
+/** `C_tot in pF` as pieces: italic quantity, upright subscript at 0.74 of the size, then the rest. */
+export function symbolPieces(symbol: LetterSymbol, rest: string, size: number): LabelPiece[] {
+	const small = size * 0.74;
+	return [
+		{ text: symbol.quantity, size, style: 'italic', drop: 0 },
+		...(symbol.subscript === undefined
+			? []
+			: [{ text: symbol.subscript, size: small, style: 'upright' as const, drop: small * 0.26 }]),
+		...(rest === '' ? [] : [{ text: rest, size, style: 'upright' as const, drop: 0 }])
+	];
+}
+
+const pieceWidth = (piece: LabelPiece) => textWidth(piece.text, piece.size, piece.style);
+
+/** Text at a fixed place of a panel, its pieces side by side. */
+export function labelLayers(
+	pieces: readonly LabelPiece[],
+	at: Place & { readonly align: 'left' | 'right' },
+	color: string
+): Layer[] {
+	const total = pieces.reduce((sum, piece) => sum + pieceWidth(piece), 0);
+	let x = at.align === 'left' ? at.x : at.x - total;
+	return pieces.map((piece) => {
+		const left = x + textWidth(/^ */.exec(piece.text)?.[0] ?? '', piece.size);
+		x += pieceWidth(piece);
+		return {
+			data: ONE_ROW,
+			mark: {
+				type: 'text',
+				text: piece.text.trimStart(),
+				align: 'left',
+				baseline: 'alphabetic',
+				fontSize: piece.size,
+				fontStyle: piece.style === 'italic' ? 'italic' : 'normal',
+				color
+			},
+			encoding: fixed({ x: left, y: at.y + piece.drop })
+		};
+	});
+}
+
+/** A label beside a curve: a thin leader from the curve, and a plate that keeps the grid out. */
+export function leaderLabel(
+	text: string,
+	place: { readonly curve: Place; readonly label: Place; readonly align: 'left' | 'right' },
+	theme: ChartTheme
+): Layer[] {
+	const { curve, label, align } = place;
+	const size = theme.labelSize;
+	const width = textWidth(text, size);
+	const left = align === 'left' ? label.x : label.x - width;
+	const margin = size * 0.15;
+	return [
+		{
+			data: ONE_ROW,
+			mark: { type: 'rule', ...strokeMark(theme.leader) },
+			encoding: fixedSpan(curve, {
+				x: align === 'left' ? left - margin * 2 : left + width + margin * 2,
+				y: label.y - size * 0.33
+			})
+		},
+		{
+			data: ONE_ROW,
+			mark: { type: 'rect', color: theme.paper, opacity: 1 },
+			encoding: fixedSpan(
+				{ x: left - margin, y: label.y - size * 0.75 - margin },
+				{ x: left + width + margin, y: label.y + size * 0.22 + margin }
+			)
+		},
+		...labelLayers(
+			[{ text, size, style: 'upright', drop: 0 }],
+			{ ...label, x: left, align: 'left' },
+			theme.ink
+		)
+	];
+}
