@@ -40,9 +40,14 @@ export const distributionSummary = z.object({
 	quantiles: z.array(z.object({ probability: z.number(), value: z.number() })),
 	/** Whether the bias itself was measured, or interpolated within each sweep. */
 	interpolated: z.boolean(),
-	/** The measurement sets behind it, and how many verdicts excluded something. */
+	/** The measurement sets behind it. */
 	sets: z.array(z.number().int()),
-	excluded: z.number().int().nonnegative()
+	/** The largest uncertainty those sets state, relative; `null` when none states one. */
+	uncertainty: z.number().nonnegative().nullable(),
+	/** Sweeps left out by a verdict. */
+	excluded: z.number().int().nonnegative(),
+	/** Sweeps left out because a suspect still waits for its verdict. */
+	quarantined: z.number().int().nonnegative()
 });
 export type DistributionSummary = z.infer<typeof distributionSummary>;
 
