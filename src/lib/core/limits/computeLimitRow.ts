@@ -1,12 +1,12 @@
 import type { Condition } from '../characteristics/condition';
 import type { Distribution } from '../distributions/summary';
 import { limitMessages } from '../messages/limits';
+import { inSi } from '../units/unit';
 import type { Basis } from './basis';
 import { fixed, pValue } from './digits';
 import { engineVersion } from './engineVersion';
 import { gateRefusals } from './gates';
 import type { LimitRow, LimitValue } from './limit';
-import { inSi } from './inSi';
 import { limitChain } from './limitChain';
 import { limitSteps } from './limitSteps';
 import { LOTS_DIFFER_BELOW, lotTest, type LotTest } from './lotTest';
@@ -151,9 +151,10 @@ function limitValue(
 		uncertainty: distribution.uncertainty ?? 0,
 		unitScale
 	});
+	const tableUnit = { symbol: unit, scale: unitScale };
 	return {
-		raw: chain.raw * unitScale,
-		printed: inSi(chain.printed.text, unitScale),
+		raw: inSi(chain.raw, tableUnit),
+		printed: inSi(chain.printed.value, tableUnit),
 		text: chain.printed.text,
 		derivation: [
 			...sampleSteps(distribution, condition),

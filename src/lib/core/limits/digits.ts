@@ -30,3 +30,11 @@ export function percent(share: number): string {
 export function pValue(p: number): string {
 	return p < 0.0001 ? 'p\u00a0<\u00a00.0001' : `p\u00a0=\u00a0${significant(p, 2)}`;
 }
+
+/**
+ * What lies beyond the twelfth digit is noise of the arithmetic. Left in, exp(ln 12.5) would be
+ * 12.499999999999998 and be rounded down to 12.4.
+ */
+export function withoutNoise(value: number): number {
+	return Number(value.toPrecision(12));
+}

@@ -1,7 +1,8 @@
-import { TRANSFORMS } from '../distributions/transforms';
 import type { Distribution } from '../distributions/summary';
+import { TRANSFORMS } from '../distributions/transforms';
+import { roundOutward, type Rounded } from '../units/rounding';
+import { withoutNoise } from './digits';
 import type { Side } from './methods/method';
-import { roundPrinted, type PrintedNumber } from './roundPrinted';
 import type { LimitPolicy } from './policy';
 
 export interface ChainInput {
@@ -20,7 +21,7 @@ export interface LimitChain {
 	readonly raw: number;
 	readonly afterDrift: number;
 	readonly afterUncertainty: number;
-	readonly printed: PrintedNumber;
+	readonly printed: Rounded;
 }
 
 /**
@@ -31,7 +32,7 @@ export function limitChain(input: ChainInput): LimitChain {
 	const { distribution, factor, side, unitScale } = input;
 	const sign = side === 'minimum' ? -1 : 1;
 	const transformed = distribution.mean + sign * factor * distribution.standardDeviation;
-	const raw = cleaned(TRANSFORMS[distribution.transform].invert(transformed) / unitScale);
+	const raw = withoutNoise(TRANSFORMS[distribution.transform].invert(transformed) / unitScale);
 	return { raw, ...outwards(raw, input) };
 }
 
@@ -46,18 +47,10 @@ export function outwards(
 	return {
 		afterDrift,
 		afterUncertainty,
-		printed: roundPrinted(
-			cleaned(afterUncertainty),
-			rules.resolution,
-			side === 'minimum' ? 'down' : 'up'
+		printed: roundOutward(
+			withoutNoise(afterUncertainty),
+			side === 'minimum' ? 'down' : 'up',
+			rules.resolution
 		)
 	};
-}
-
-/**
- * What lies beyond the twelfth digit is noise of the arithmetic. Left in, exp(ln 12.5) would be
- * 12.499999999999998 and be rounded down to 12.4.
- */
-function cleaned(value: number): number {
-	return Number(value.toPrecision(12));
 }

@@ -7,7 +7,7 @@ import { outwards, type LimitChain } from './limitChain';
 import { LOTS_DIFFER_BELOW, type LotTest } from './lotTest';
 import type { Margin, Side } from './methods/method';
 import type { LimitPolicy } from './policy';
-import { resolutionText } from './roundPrinted';
+import { resolutionText } from './resolutionText';
 
 export interface LimitStepsInput {
 	readonly distribution: Distribution;

@@ -1,10 +1,11 @@
 import type { Condition } from '../characteristics/condition';
 import type { Distribution } from '../distributions/summary';
-import { significant } from './digits';
-import { inSi } from './inSi';
+import { roundNearest } from '../units/rounding';
+import { inSi } from '../units/unit';
+import { significant, withoutNoise } from './digits';
 import type { LimitValue } from './limit';
 import type { LimitPolicy } from './policy';
-import { resolutionText, roundPrinted } from './roundPrinted';
+import { resolutionText } from './resolutionText';
 import { sampleSteps } from './sampleSteps';
 
 /** The type-8 median, in SI. */
@@ -23,11 +24,11 @@ export function typicalValue(
 	{ condition, unit, unitScale }: { condition: Condition; unit: string; unitScale: number }
 ): LimitValue {
 	const raw = medianOf(distribution);
-	const inUnit = Number((raw / unitScale).toPrecision(12));
-	const printed = roundPrinted(inUnit, rules.resolution, 'nearest');
+	const inUnit = withoutNoise(raw / unitScale);
+	const printed = roundNearest(inUnit, rules.resolution);
 	return {
 		raw,
-		printed: inSi(printed.text, unitScale),
+		printed: inSi(printed.value, { symbol: unit, scale: unitScale }),
 		text: printed.text,
 		derivation: [
 			...sampleSteps(distribution, condition),

@@ -32,7 +32,7 @@ export const limitMessages = {
 	nothingLeft: () =>
 		'Drift allowance and uncertainty use up the whole minimum; nothing is left to promise.',
 	lotsDiffer: (lots: number, F: string, p: string) =>
-		`The ${lots} lots differ (F = ${F}, ${p}), and pooling them hides it: the limit speaks of these lots, not of future ones.`,
+		`The ${lots} lots differ (F\u00a0=\u00a0${F}, ${p}), and pooling them hides it: the limit speaks of these lots, not of future ones.`,
 	contentBeyondSample: (content: number, devices: number) =>
 		`Content ${content} speaks of about one device in ${Math.round(1 / (1 - content)).toLocaleString('en')}; ${devices} devices can't show so rare a one, so the limit rests on the normal shape alone.`,
 	quarantined: (count: number) =>
