@@ -115,8 +115,8 @@ it('is the same to the last bit in whatever order the devices come', () => {
 			fc.array(device, { minLength: 2, maxLength: 60 }),
 			fc.infiniteStream(fc.nat()),
 			(devices, order) => {
-				const shuffled = devices
-					.map((of) => ({ of, key: order.next().value ?? 0 }))
+				const shuffled: typeof devices = devices
+					.map((of) => ({ of, key: Number(order.next().value) }))
 					.sort((a, b) => a.key - b.key)
 					.map(({ of }) => of);
 				const summed = (list: typeof devices) =>

@@ -23,6 +23,11 @@ export const limitMessages = {
 			: `Capacitance was not measured at ${temperature} °C; it was at ${measured.map((at) => `${at} °C`).join(', ')}.`,
 	frequencyNotMeasured: (frequency: number, measured: readonly number[]) =>
 		`Capacitance was not measured at ${frequency} Hz; it was at ${measured.map((at) => `${at} Hz`).join(', ')}.`,
+	severalFrequencies: (measured: readonly number[]) =>
+		`Capacitance was measured at ${measured.map((at) => `${at} Hz`).join(' and ')}; say which is meant.`,
+	noSuchPolicy: (id: number) => `There is no policy version ${id}.`,
+	computingAt: (temperature: number) => `Distributions at ${temperature} °C`,
+	computed: (count: number) => `${plural(count, 'distribution')} computed`,
 	noDistributions: () =>
 		'This product has no distributions yet: accept a measurement set, and its limits follow.',
 	sigmaNeedsTest: (k: number) =>

@@ -1,0 +1,22 @@
+import { condition, type Condition } from '../characteristics/condition';
+
+const FIELDS = new Map<string, keyof Condition>([
+	['T', 'temperatureCelsius'],
+	['f', 'frequency'],
+	['VR', 'reverseVoltage']
+]);
+
+/**
+ * The condition that `conditionKey` wrote.
+ *
+ * @throws {RangeError} for a text it doesn't write
+ */
+export function readConditionKey(key: string): Condition {
+	const fields = key.split(';').map((part): [string, number] => {
+		const [name = '', value = ''] = part.split('=');
+		return [FIELDS.get(name) ?? name, value === '' ? Number.NaN : Number(value)];
+	});
+	const parsed = condition.strict().safeParse(Object.fromEntries(fields));
+	if (!parsed.success) throw new RangeError(`condition key requires T=…;f=…;VR=…, got "${key}"`);
+	return parsed.data;
+}

@@ -1,0 +1,6 @@
+import { createHash } from 'node:crypto';
+
+/** SHA-256 of bytes, or of a text in UTF-8; hex. */
+export function sha256(content: string | Uint8Array): string {
+	return createHash('sha256').update(content).digest('hex');
+}
