@@ -42,3 +42,6 @@ export const reasonNeeded = () => 'Say why, so that the next person can act on i
 export const commentNeeded = () => 'Write a comment.';
 
 export const flagNeedsComment = () => 'Say what is wrong with the row.';
+
+export const documentDamaged = () =>
+	'The stored document no longer matches its content hash. Return the revision and submit it again.';

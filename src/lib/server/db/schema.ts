@@ -468,7 +468,9 @@ export const decision = sqliteTable('decision', {
 	revision: integer()
 		.notNull()
 		.references(() => revision.id, { onDelete: 'cascade' }),
-	event: text({ enum: ['submit', 'approve', 'return', 'publish'] }).notNull(),
+	event: text({
+		enum: ['submit', 'approve', 'return', 'publish', 'withdraw', 'reinstate']
+	}).notNull(),
 	reason: text().notNull().default(''),
 	by: text()
 		.notNull()

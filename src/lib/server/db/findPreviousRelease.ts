@@ -1,0 +1,27 @@
+import { and, desc, eq, ne } from 'drizzle-orm';
+import { readDocument } from '$lib/core/datasheet/readDocument';
+import { versionText } from '$lib/core/datasheet/record';
+import type { Database } from './database';
+import { release, revision } from './schema';
+
+/**
+ * What the next release of a product is set against: the highest version that isn't withdrawn, with
+ * its document; `undefined` before the first.
+ */
+export async function findPreviousRelease(db: Database, product: number) {
+	const [found] = await db
+		.select({
+			id: release.id,
+			major: release.major,
+			minor: release.minor,
+			effectiveFrom: release.effectiveFrom,
+			sha256: revision.sha256,
+			document: revision.document
+		})
+		.from(release)
+		.innerJoin(revision, eq(release.revision, revision.id))
+		.where(and(eq(release.product, product), ne(release.state, 'withdrawn')))
+		.orderBy(desc(release.major), desc(release.minor))
+		.limit(1);
+	return found && { ...found, version: versionText(found), document: readDocument(found.document) };
+}
