@@ -77,7 +77,7 @@ const ratingRows: RatingRow[] = [
 		name: 'total power dissipation',
 		conditions: [symbol('T', 'a'), text(' ≤ 25 °C')],
 		minimum: null,
-		maximum: printed('250'),
+		maximum: printed('250', 1e-3),
 		unit: 'mW',
 		by: 'Ida Sandvik',
 		reason: 'package family'
@@ -269,7 +269,6 @@ export function sampleDocument(changes: Partial<DatasheetDocument> = {}): Datash
 			'Typical values are medians and are not guaranteed.',
 			'Minima are rounded down and maxima up.'
 		],
-		omissions: [],
 		...changes
 	});
 }

@@ -194,16 +194,6 @@ export const datasheetDocument = z.object({
 	/** The terms behind each basis mark that occurs, in the order of strength. */
 	basisNotes: z.array(z.object({ basis, mark: z.string(), text: z.string() })),
 	/** Statements below the tables: typical values, rounding, what statistical limits rest on. */
-	footnotes: z.array(z.string()),
-	/** What the template asks for and this datasheet leaves out: not printed, but reviewed. */
-	omissions: z.array(
-		z.object({
-			id: z.string(),
-			slot: z.string(),
-			label: z.string(),
-			reason: z.string(),
-			by: z.string()
-		})
-	)
+	footnotes: z.array(z.string())
 });
 export type DatasheetDocument = z.infer<typeof datasheetDocument>;

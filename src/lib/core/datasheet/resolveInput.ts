@@ -37,6 +37,8 @@ export interface ResolveInput {
 	readonly policies: ReadonlyMap<number, PolicyVersion>;
 }
 
+export type PrintedTexts = Pick<BoundTexts, 'unit' | 'minimum' | 'typical' | 'maximum'>;
+
 /** A place of the datasheet as the draft's list shows it. */
 export interface SlotView {
 	/** Id of the row in the document: the slot, with the bias for a row of a table. */
@@ -51,12 +53,15 @@ export interface SlotView {
 	readonly label: string;
 	readonly state: SlotState;
 	readonly essential: boolean;
-	/** What it prints, and what the newest measurements would print, where they say anything. */
-	readonly prints: BoundTexts | null;
+	/** What it prints, digits as they were computed or typed. */
+	readonly prints: PrintedTexts | null;
+	/** What the newest measurements would print, where they say anything. */
 	readonly current: BoundTexts | null;
 	readonly binding: Exclude<Binding, { kind: 'table' }> | null;
 	/** What is wrong with it, or why nothing can be bound; `null` when all is well. */
 	readonly problem: string | null;
+	/** What the engine remarks about the numbers as they are now. */
+	readonly warnings: readonly string[];
 }
 
 /** Something that submitting needs settled first. */
