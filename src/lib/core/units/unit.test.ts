@@ -43,6 +43,7 @@ describe('inUnit', () => {
 		expect(inUnit(1.25e-11, 1e-12)).toBe(12.5);
 		expect(inUnit(3.9417e-11, 1e-12)).toBe(39.417);
 		expect(inUnit(2.1e-12, 1e-12)).toBe(2.1);
+		expect(inUnit(1.2e6, 1e6)).toBe(1.2);
 		expect(inUnit(inSi(38.917, UNITS.capacitance[3]), 1e-12)).toBe(38.917);
 	});
 

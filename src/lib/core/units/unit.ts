@@ -1,4 +1,4 @@
-import { decimalOf, numberOf, plus, times } from './decimal';
+import { decimalOf, magnitude, numberOf, plus, times } from './decimal';
 
 /** The kinds of quantity that files and tables hold. */
 export type UnitKind = 'capacitance' | 'voltage' | 'current' | 'frequency' | 'temperature';
@@ -84,8 +84,15 @@ export function inSi(value: number, { scale, offset = 0 }: Unit): number {
  */
 export function inUnit(value: number, unitScale: number): number {
 	const scale = decimalOf(unitScale);
-	if (scale.digits !== 1n)
+	const power = magnitude(scale);
+	if (power === undefined || scale.digits !== 10n ** BigInt(power - scale.exponent))
 		throw new RangeError(`a unit's size requires a power of ten, got ${unitScale}`);
 	const { digits, exponent } = decimalOf(value);
-	return numberOf({ digits, exponent: exponent - scale.exponent });
+	return numberOf({ digits, exponent: exponent - power });
+}
+
+/** The unit of a kind that is so large in SI, without an offset. */
+export function findUnitOfSize(kind: UnitKind, scale: number): Unit | undefined {
+	const units: readonly Unit[] = UNITS[kind];
+	return units.find((unit) => unit.scale === scale && unit.offset === undefined);
 }
