@@ -1,0 +1,24 @@
+import { PERMISSIONS, ROLE_NAMES } from './review/permissions';
+import type { Permission } from './review/permissions';
+
+/*
+ * Sentences that belong to no one part. Those of a part stand in messages/ under its name.
+ */
+
+export const signInFirst = () => 'Sign in first.';
+
+export const mayNot = (permission: Permission) => {
+	const roles = PERMISSIONS[permission].map((role) => ROLE_NAMES[role]);
+	return `This needs the role ${roles.join(' or ')}. An administrator can give it to you.`;
+};
+
+export const wrongOrigin = () =>
+	'The request did not come from this address. Open the page again and repeat it; nothing was changed.';
+
+export const badToken = () =>
+	'The access token is unknown, revoked, or its owner can no longer sign in.';
+
+export const notFound = () => 'There is nothing at this address.';
+
+export const ourFault = (requestId: string) =>
+	`Something went wrong here, and nothing was changed. The request was ${requestId}.`;
