@@ -1,0 +1,78 @@
+import { MEANING_NAMES } from '../measurements/columns';
+import type { ColumnMeaning } from '../measurements/columns';
+
+const count = (size: number, one: string, many = `${one}s`) =>
+	`${size.toLocaleString('en')} ${size === 1 ? one : many}`;
+
+export const measurementMessages = {
+	// The file as a whole
+	emptyFile: () => 'The file is empty.',
+	notText: () => 'This isn’t a text file. Save the measurements as CSV and upload that.',
+	utf16: () => 'The file is written in UTF-16. Save it as UTF-8 and upload it again.',
+	notATable: () =>
+		'No table was found: lines with the same number of fields, some of them numbers, separated by comma, semicolon, bar or tab.',
+	noDataLines: () => 'No line with a reading was found below the column names.',
+	tooManyBiases: (limit: number, temperature: number) =>
+		`There are more than ${limit} different biases at ${temperature} °C. Sweeps are compared at equal biases: give the set values, not the measured ones.`,
+	tooManyConditions: (limit: number) =>
+		`There are more than ${limit} different temperatures and frequencies. Sweeps are compared at equal ones: give the set values, not the measured ones.`,
+	fileTooLarge: (limit: number) =>
+		`The file is larger than ${Math.round(limit / 1e6).toLocaleString('en')} MB, the most this server takes.`,
+	fileNameMissing: () => 'Say the file’s name: …/measurement-sets?filename=lot-a.csv',
+	duplicate: (fileName: string, at: string) =>
+		`This file was uploaded before, as ${fileName} on ${at.slice(0, 10)}.`,
+	uploadNotFound: (id: number) => `There is no upload ${id}.`,
+	setNotFound: (id: number) => `There is no measurement set ${id}.`,
+	notReadYet: () => 'The file is still being read. Its columns can be mapped when that is done.',
+	alreadyAccepted: () => 'This upload was accepted; its measurement set is there.',
+	alreadyImporting: () => 'This upload is being imported.',
+
+	// The mapping
+	columnMissing: (meaning: ColumnMeaning) => `No column is the ${MEANING_NAMES[meaning]}.`,
+	columnTwice: (meaning: ColumnMeaning) =>
+		`Two columns are the ${MEANING_NAMES[meaning]}; choose one.`,
+	unitMissing: (header: string) => `Say the unit of “${header}”; nothing is guessed.`,
+	temperatureMissing: () =>
+		'No column is the temperature. Choose one, or state the temperature of the whole file.',
+	frequencyMissing: () =>
+		'No column is the frequency. Choose one, or state the frequency of the whole file.',
+	biasSignMissing: () => 'Say which sign the file gives a reverse bias.',
+	columnCount: (expected: number, actual: number) =>
+		`The file has ${count(expected, 'column')}; the mapping speaks of ${actual}.`,
+	waferLotDiffers: (lot: string, stored: string, stated: string) =>
+		`Lot ${lot} is known to come from wafer lot ${stored}; this upload says ${stated}.`,
+	waferLotTwice: (lot: string, first: string, second: string) =>
+		`Lot ${lot} is said to come from two wafer lots, ${first} and ${second}.`,
+
+	// Lines
+	quoteNotClosed: () => 'A quotation mark doesn’t end in the line.',
+	fieldCount: (expected: number, actual: number) =>
+		`Expected ${count(expected, 'field')}, got ${actual}.`,
+	notANumber: (meaning: ColumnMeaning, read: string) =>
+		read === ''
+			? `The ${MEANING_NAMES[meaning]} is empty.`
+			: `The ${MEANING_NAMES[meaning]} “${read}” isn’t a number.`,
+	nameEmpty: (meaning: ColumnMeaning) => `The ${MEANING_NAMES[meaning]} is empty.`,
+	badBytes: () => 'A name holds bytes that aren’t text in the file’s encoding.',
+	capacitanceNotPositive: (read: string) =>
+		`The capacitance “${read}” isn’t above zero, and its logarithm is needed.`,
+	capacitanceOverflow: (read: string) =>
+		`The capacitance “${read}” is a farad or more, which is how testers mark a reading they couldn’t take.`,
+	temperatureBelowZero: (read: string) => `The temperature “${read}” is below absolute zero.`,
+	frequencyNotPositive: (read: string) => `The frequency “${read}” isn’t above zero.`,
+	linesRefused: (total: number) =>
+		`${count(total, 'line')} can’t be used. Correct the file or the mapping, or leave these lines out.`,
+	skipCountDiffers: (agreed: number, total: number) =>
+		`You agreed to leave out ${count(agreed, 'line')}; ${count(total, 'line')} can’t be used.`,
+
+	// Suspects and verdicts
+	outlier: (z: number, bias: number, beyond: number, biases: number, lot: string) =>
+		`ln C lies ${Math.abs(z) >= 100 ? 'more than 100' : Math.abs(z).toFixed(1)} robust standard deviations ${z < 0 ? 'below' : 'above'} lot ${lot} at ${bias} V; beyond 6 at ${beyond} of ${biases} biases.`,
+	rises: (from: number, to: number, percent: number, times: number) =>
+		`Capacitance rises by ${percent.toPrecision(2)} % from ${from} V to ${to} V${Number.isFinite(times) ? `, ${times.toFixed(0)} times the repeatability` : ''}.`,
+	notSuspect: () => 'This sweep isn’t in quarantine, so there is nothing to decide.',
+	setNotAccepted: () => 'This measurement set isn’t accepted.',
+	reasonNeeded: () => 'Say why, so that the next person can judge it.',
+	verdictUnchanged: (decision: 'keep' | 'exclude') =>
+		`The sweep is already ${decision === 'keep' ? 'kept' : 'excluded'}.`
+};
