@@ -70,9 +70,16 @@ function canBeRedone(input: LimitStepsInput, digits: ChainDigits): boolean {
 	const raw = TRANSFORMS[distribution.transform].invert(
 		readDigits(digits.mean) + sign * readDigits(digits.factor) * readDigits(digits.deviation)
 	);
-	const printedFrom = (value: number) =>
+	const isPrinted = (value: number) =>
 		outwards(value, { side, rules, uncertainty }).printed.text === chain.printed.text;
-	return printedFrom(raw) && printedFrom(readDigits(digits.raw));
+	const isRounded = (value: number) =>
+		outwards(value, { side, rules: { ...rules, drift: 0 }, uncertainty: 0 }).printed.text ===
+		chain.printed.text;
+	return (
+		isPrinted(raw) &&
+		isPrinted(readDigits(digits.raw)) &&
+		isRounded(readDigits(digits.afterUncertainty))
+	);
 }
 
 function steps(input: LimitStepsInput, digits: ChainDigits): DerivationStep[] {

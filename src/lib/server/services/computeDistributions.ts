@@ -13,7 +13,7 @@ import { appendAudit } from '../db/appendAudit';
 import type { Connection } from '../db/database';
 import { distribution, product } from '../db/schema';
 import { write } from '../db/write';
-import type { JobContext, JobHandler } from '../work/handlers';
+import type { JobContext, JobHandler } from '../work/jobHandler';
 import { CAPACITANCE, readBasis, type Basis } from './readBasis';
 import { readDevices, readSweeps, sweepConditions } from './readSweeps';
 

@@ -1,6 +1,6 @@
-import { canonicalize } from 'json-canonicalize';
 import { desc, eq } from 'drizzle-orm';
 import { limitPolicy, type LimitPolicy } from '$lib/core/limits/policy';
+import { policyText } from '$lib/core/limits/policyText';
 import { appendAudit } from '../db/appendAudit';
 import { policyVersion } from '../db/schema';
 import { write } from '../db/write';
@@ -58,7 +58,7 @@ export async function ensurePolicies({ db }: Pick<Stores, 'db'>): Promise<void> 
 			if (newest !== undefined) continue;
 
 			const json = limitPolicy.parse(rules);
-			const hash = sha256(canonicalize(json));
+			const hash = sha256(policyText(json));
 			await tx
 				.insert(policyVersion)
 				.values({ policy, number: 1, json, hash, createdAt: at, createdBy: null });
