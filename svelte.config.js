@@ -10,6 +10,9 @@ export default {
 			// The package's own index pulls in every validator it knows; Platen uses one.
 			'superforms-zod': 'node_modules/sveltekit-superforms/dist/adapters/zod4.js'
 		},
+		// Platen checks the origin of every cookie request itself, whatever its content type, and lets
+		// bearer requests come from anywhere: see hooks.server.ts.
+		csrf: { trustedOrigins: ['*'] },
 		csp: {
 			mode: 'nonce',
 			directives: {

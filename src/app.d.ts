@@ -1,4 +1,7 @@
 import type { Asking } from '$lib/server/auth/requirePermission';
+import type { Attempts } from '$lib/server/auth/attempts';
+import type { Sessions } from '$lib/server/auth/sessions';
+import type { Changes } from '$lib/server/work/changes';
 import type { Connection } from '$lib/server/db/database';
 import type { Log } from '$lib/server/logging';
 import type { Storage } from '$lib/server/storage/storage';
@@ -12,6 +15,11 @@ declare global {
 		interface Locals extends Asking {
 			db: Connection;
 			storage: Storage;
+			sessions: Sessions;
+			/** Failed sign-ins, by address and by email. */
+			signInAttempts: Attempts;
+			changes: Changes;
+			isDemo: boolean;
 			sessionId: string | null;
 			requestId: string;
 			log: Log;

@@ -96,7 +96,7 @@ export const LAYERS: Readonly<Record<string, Layer>> = {
 		)
 	},
 	'composition roots': {
-		files: /^src\/(hooks\.server\.ts|app\.d\.ts|tasks\/)/,
+		files: /^src\/(hooks\.server\.ts|app\.d\.ts|tasks\/|lib\/server\/application\.ts)/,
 		own: /^src\/(lib\/(core|server)|tasks)\//,
 		packages: /.*/
 	}

@@ -22,3 +22,12 @@ export const notFound = () => 'There is nothing at this address.';
 
 export const ourFault = (requestId: string) =>
 	`Something went wrong here, and nothing was changed. The request was ${requestId}.`;
+
+export const tooManyAttempts = () =>
+	'Too many attempts from here. Wait a few minutes and try again.';
+
+export const jobGaveUp = (attempts: number) =>
+	`This was tried ${attempts} times and never came to its end. What was uploaded is kept.`;
+
+export const jobFailed = () =>
+	'This failed by a fault of the program. What was uploaded is kept; the log of the server has the details.';

@@ -6,11 +6,11 @@ import type { SignedIn } from './signedIn';
 
 /** The part of a request's locals that says who is asking, and from where. */
 export interface Asking {
-	readonly person: SignedIn | null;
+	person: SignedIn | null;
 	/** Whether the request is one of `/api/`. */
-	readonly isApi: boolean;
+	isApi: boolean;
 	/** Where a person who has to sign in first wanted to go. */
-	readonly path: string;
+	path: string;
 }
 
 /**

@@ -9,3 +9,6 @@ export type Database = Pick<
 	Connection,
 	'select' | 'selectDistinct' | 'insert' | 'update' | 'delete' | 'query' | 'run' | 'all' | 'get' | 'values'
 >;
+
+/** An open transaction, as `write` hands it out. */
+export type Transaction = Parameters<Parameters<Connection['transaction']>[0]>[0];

@@ -1,4 +1,4 @@
-import type { Connection, Database } from './database';
+import type { Connection, Transaction } from './database';
 
 const GIVE_UP_AFTER_MILLISECONDS = 10_000;
 const LONGEST_PAUSE_MILLISECONDS = 120;
@@ -24,7 +24,7 @@ const pauseAfter = (attempt: number) =>
  */
 export function write<Result>(
 	db: Connection,
-	work: (tx: Database) => Promise<Result>
+	work: (tx: Transaction) => Promise<Result>
 ): Promise<Result> {
 	const before = queues.get(db) ?? Promise.resolve();
 	const mine = before.then(
@@ -37,7 +37,7 @@ export function write<Result>(
 
 async function attempt<Result>(
 	db: Connection,
-	work: (tx: Database) => Promise<Result>
+	work: (tx: Transaction) => Promise<Result>
 ): Promise<Result> {
 	const deadline = Date.now() + GIVE_UP_AFTER_MILLISECONDS;
 	for (let count = 0; ; count += 1) {

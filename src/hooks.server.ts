@@ -1,0 +1,123 @@
+import { randomUUID } from 'node:crypto';
+import type { Handle, HandleServerError, ServerInit } from '@sveltejs/kit';
+import { sequence } from '@sveltejs/kit/hooks';
+import { badToken, notFound, ourFault, tooManyAttempts, wrongOrigin } from '$lib/core/messages';
+import { application, closeApplication, openApplication } from '$lib/server/application';
+import { personOfSession } from '$lib/server/auth/personOfSession';
+import { personOfToken } from '$lib/server/auth/personOfToken';
+import { problem } from '$lib/server/problem';
+
+export const init: ServerInit = async () => {
+	await openApplication(process.env);
+	process.once('sveltekit:shutdown', () => void closeApplication());
+};
+
+const CHANGES = new Set(['POST', 'PUT', 'PATCH', 'DELETE']);
+const REQUEST_ID = /^[\w.-]{1,64}$/;
+
+/** Gives the request an id, a log of its own and what it may touch; says how it ended. */
+const request: Handle = async ({ event, resolve }) => {
+	const { db, storage, sessions, signInAttempts, changes, config, log } = application();
+	const given = event.request.headers.get('x-request-id');
+	const requestId = given !== null && REQUEST_ID.test(given) ? given : randomUUID();
+	event.locals.requestId = requestId;
+	event.locals.db = db;
+	event.locals.storage = storage;
+	event.locals.sessions = sessions;
+	event.locals.signInAttempts = signInAttempts;
+	event.locals.changes = changes;
+	event.locals.isDemo = config.isDemo;
+	event.locals.log = log.child({ requestId });
+	event.locals.person = null;
+	event.locals.sessionId = null;
+	event.locals.isApi = event.url.pathname.startsWith('/api/');
+	event.locals.path = event.url.pathname + event.url.search;
+
+	const start = performance.now();
+	const response = await resolve(event);
+	response.headers.set('x-request-id', requestId);
+	event.locals.log.info({
+		method: event.request.method,
+		path: event.url.pathname,
+		status: response.status,
+		milliseconds: Math.round(performance.now() - start),
+		person: personId(event.locals)
+	});
+	return response;
+};
+
+const personId = (locals: App.Locals) => locals.person?.id;
+
+/** Who is asking: by token on the API, by session otherwise. */
+const person: Handle = async ({ event, resolve }) => {
+	const { sessions, tokenAttempts } = application();
+	const authorization = event.request.headers.get('authorization');
+
+	if (event.locals.isApi && authorization !== null) {
+		const address = event.getClientAddress();
+		if (await tokenAttempts.isSpent(address)) return problem(429, tooManyAttempts());
+		const found = await personOfToken(event.locals.db, authorization);
+		if (found === undefined) {
+			await tokenAttempts.spend(address);
+			return problem(401, badToken(), {});
+		}
+		event.locals.person = found;
+		return resolve(event);
+	}
+
+	// A cookie goes along by itself, wherever a request was made up: so it must come from here.
+	if (CHANGES.has(event.request.method)) {
+		const { origin } = application().config;
+		if (event.request.headers.get('origin') !== origin) {
+			return event.locals.isApi
+				? problem(403, wrongOrigin())
+				: new Response(wrongOrigin(), { status: 403 });
+		}
+	}
+	await personOfSession(sessions, event);
+	return resolve(event);
+};
+
+/** What the framework's content security policy does not say. */
+const headers: Handle = async ({ event, resolve }) => {
+	const response = await resolve(event);
+	response.headers.set('x-content-type-options', 'nosniff');
+	response.headers.set('referrer-policy', 'same-origin');
+	response.headers.set('permissions-policy', 'camera=(), geolocation=(), microphone=()');
+	response.headers.set('cross-origin-opener-policy', 'same-origin');
+	response.headers.set('cross-origin-resource-policy', 'same-origin');
+	return response;
+};
+
+/** The API answers with problem details, whatever refused. */
+const problems: Handle = async ({ event, resolve }) => {
+	const response = await resolve(event);
+	const isRefusal = response.status >= 400 && event.locals.isApi;
+	const type = response.headers.get('content-type') ?? '';
+	if (!isRefusal || type.startsWith('application/problem+json')) return response;
+	return problem(response.status, await detailOf(response, event.locals.requestId));
+};
+
+async function detailOf(response: Response, requestId: string): Promise<string> {
+	if (response.status === 404 && !(response.headers.get('content-type') ?? '').includes('json')) {
+		return notFound();
+	}
+	const text = await response.text();
+	try {
+		const said: unknown = JSON.parse(text);
+		if (typeof said === 'object' && said !== null && 'message' in said) return String(said.message);
+	} catch {
+		// Not JSON: the text is the framework's own.
+	}
+	return response.status >= 500 ? ourFault(requestId) : text.slice(0, 500);
+}
+
+export const handle = sequence(headers, request, problems, person);
+
+export const handleError: HandleServerError = ({ error, event, status, message }) => {
+	const { requestId } = event.locals;
+	if (status === 404) return { message: notFound(), requestId };
+	if (status < 500) return { message, requestId };
+	event.locals.log.error({ err: error });
+	return { message: ourFault(requestId), requestId };
+};
