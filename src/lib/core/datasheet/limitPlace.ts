@@ -1,3 +1,4 @@
+import type { Basis } from '../limits/basis';
 import type { LimitRow } from '../limits/limit';
 import { draftMessages } from '../messages/datasheet';
 import type { BoundTexts, LimitBinding, StruckOut } from './binding';
@@ -39,7 +40,7 @@ export function limitPlace(
 	const basis = limit?.basis ?? (policy === null ? null : computedBasis(policy.rules));
 	const current =
 		row === undefined || basis === null ? null : boundTextsOf(row, { basis, rules: policy?.rules });
-	const needed = basis === 'typical' ? required.filter((part) => part === 'typical') : required;
+	const needed = neededParts(required, { bias: seed.bias, declaredBasis: limit?.basis });
 	const state = limitState(held, hasNumbers(current) ? current : null, needed);
 	const isCurrent = state === 'bound' && current !== null;
 	const prints = isCurrent ? current : (limit?.printed ?? null);
@@ -54,12 +55,27 @@ export function limitPlace(
 		prints,
 		unitScale: stands?.unitScale ?? 1,
 		current,
+		required,
 		problem: problemOf({ state, prints, current, row, needed, name: seed.name, basis, policy }),
 		warnings: row?.warnings ?? [],
 		trace: stands?.inputHash ?? null,
 		sampleSize: stands?.sampleSize ?? 0,
 		independentLots: stands?.independentLots ?? 0
 	};
+}
+
+/**
+ * Which parts have to be there. A row of a table may be declared *typical*, and then needs its
+ * typical value alone; a characteristic needs what its template asks for on any basis.
+ */
+export function neededParts(
+	required: readonly Part[],
+	{
+		bias,
+		declaredBasis
+	}: { readonly bias: number | null; readonly declaredBasis: Basis | undefined }
+): readonly Part[] {
+	return bias !== null && declaredBasis === 'typical' ? ['typical'] : required;
 }
 
 function hasNumbers(texts: BoundTexts | null): boolean {

@@ -20,6 +20,7 @@ export function ratingPlace({ bindings }: ResolveInput, slot: RatingSlot, sectio
 		label: placeLabel(symbolText(slot.symbol), slot.conditions),
 		state,
 		essential: slot.essential,
+		required: [],
 		prints: binding?.kind === 'rating' ? ratingTexts(binding, slot) : null,
 		unit: slot.unit,
 		unitScale: unitScaleOf(slot.unit),

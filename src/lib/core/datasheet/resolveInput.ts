@@ -3,6 +3,7 @@ import type { PolicyVersion } from '../limits/policy';
 import type { Organization } from '../organization';
 import type { ProductClass, Template } from '../template/template';
 import type { Binding, BoundTexts } from './binding';
+import type { Part } from './boundTexts';
 import type { DatasheetDocument, DatasheetStatus, SlotState } from './document';
 
 /** All that a datasheet is made of, by value. */
@@ -53,6 +54,8 @@ export interface SlotView {
 	readonly label: string;
 	readonly state: SlotState;
 	readonly essential: boolean;
+	/** Which numbers of a limit the template asks for; empty for a rating. */
+	readonly required: readonly Part[];
 	/** What it prints, digits as they were computed or typed. */
 	readonly prints: PrintedTexts | null;
 	/** What the newest measurements would print, where they say anything. */

@@ -4,6 +4,7 @@ export const draftMessages = {
 	nothingComputed: (name: string) =>
 		`No stored measurement gives ${name} at this condition. Bind it when it is measured, or strike it out with a reason.`,
 	bindingUnread: () => 'Nothing is bound here yet.',
+	ratingIsTyped: () => 'A rating is typed by a person, with a reason.',
 	ratingUntyped: () => 'No value is typed yet.',
 	missingParts: (parts: readonly string[], refusals: readonly string[]) =>
 		refusals.length > 0

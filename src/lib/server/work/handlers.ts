@@ -1,5 +1,6 @@
 import { computeDistributions } from '../services/computeDistributions';
 import { publishReleaseJob } from '../services/publishReleaseJob';
+import { renderProof } from '../services/renderProof';
 import { verifyEvidence } from '../services/verifyEvidence';
 import type { JobHandler } from './jobHandler';
 
@@ -7,5 +8,6 @@ import type { JobHandler } from './jobHandler';
 export const handlers: Readonly<Record<string, JobHandler>> = {
 	'compute-distributions': computeDistributions,
 	'verify-evidence': verifyEvidence,
+	'render-proof': renderProof,
 	'publish-release': publishReleaseJob
 };
