@@ -30,3 +30,6 @@ export const publishedDocumentDamaged = () =>
 
 export const notApprovedAnymore = (number: number, state: string) =>
 	`Revision ${number} is ${state}, so it was not published.`;
+
+export const notInLibrary = (partNumber: string) =>
+	`The library has no datasheet of ${partNumber}.`;

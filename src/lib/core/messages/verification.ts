@@ -38,3 +38,6 @@ export const memoDiffers = (stored: string) =>
 	`the stored limit says ${stored}, which is not what is printed`;
 
 export const conditionNotMeasured = () => 'no accepted measurement at this condition';
+
+export const secondRouteNote = () =>
+	'2nd route: separate reader, factor by integrating the confidence, before rounding; raw values may differ by 0.0001 %';
