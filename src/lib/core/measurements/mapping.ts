@@ -44,7 +44,7 @@ export function mappingProblems(mapping: ColumnMapping, setup: MeasurementSetup)
 		...(says('temperature') || setup.temperatureCelsius !== null
 			? []
 			: [measurementMessages.temperatureMissing()]),
-		...(says('frequency') || setup.frequency !== null
+		...(says('frequency') || setup.frequencyHertz !== null
 			? []
 			: [measurementMessages.frequencyMissing()]),
 		...columnMeaning.options

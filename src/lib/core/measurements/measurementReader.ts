@@ -63,7 +63,7 @@ export class MeasurementReader {
 			this.#take(bytes, start, end);
 			start = end + 1;
 		}
-		this.#rest = bytes.slice(start);
+		this.#rest = new Uint8Array(bytes.subarray(start));
 	}
 
 	/** Takes what is left: the last line may lack its end. */
@@ -107,7 +107,7 @@ export class MeasurementReader {
 			? this.#setup.temperatureCelsius
 			: this.#reader.temperatureCelsius;
 		const frequency = Number.isNaN(this.#reader.frequency)
-			? this.#setup.frequency
+			? this.#setup.frequencyHertz
 			: this.#reader.frequency;
 		if (temperature === null) return measurementMessages.temperatureMissing();
 		if (frequency === null) return measurementMessages.frequencyMissing();

@@ -19,7 +19,7 @@ export class NameColumn {
 		if (this.#isSame(bytes, from, to)) return this.#name;
 		const name = asName(this.#decoder.decode(bytes.subarray(from, to)));
 		if (name !== undefined) {
-			this.#bytes = bytes.slice(from, to);
+			this.#bytes = new Uint8Array(bytes.subarray(from, to));
 			this.#name = name;
 		}
 		return name;

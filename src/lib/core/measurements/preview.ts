@@ -55,14 +55,16 @@ export function previewUpload(
 	const sample = sampleLines(all, dialect);
 	if (sample.length === 0) return { status: 'noData' };
 
+	// Lines that all end in a separator have no column behind it.
 	const names =
 		dialect.headerLine === 0
 			? []
 			: (splitLine(all[dialect.headerLine - 1] ?? '', dialect.separator) ?? []);
-	const width = sample.some(({ fields }) => fields.length >= names.length) ? dialect.fieldCount : 0;
-	const headers = Array.from(
-		{ length: trailingEmpty(names, width) },
-		(_, position) => names[position] || `Column ${position + 1}`
+	const headers = distinct(
+		Array.from(
+			{ length: names.at(-1) === '' ? dialect.fieldCount - 1 : dialect.fieldCount },
+			(_, position) => names[position] || `Column ${position + 1}`
+		)
 	);
 	const recognised = recogniseColumns(headers);
 	const numbersIn = (position: number) =>
@@ -95,7 +97,9 @@ function sampleLines(all: readonly string[], dialect: FileDialect): SampleLine[]
 		.map(({ number, text }) => ({ number, fields: splitLine(text, dialect.separator) ?? [text] }));
 }
 
-/** Lines that all end in a separator have no column behind it. */
-function trailingEmpty(names: readonly string[], width: number): number {
-	return names.length > 0 && names.at(-1) === '' ? width - 1 : width;
+/** A name that comes again gets its place behind it, so that each column can be spoken of. */
+function distinct(headers: readonly string[]): string[] {
+	return headers.map((header, position) =>
+		headers.indexOf(header) === position ? header : `${header} (column ${position + 1})`
+	);
 }

@@ -3,11 +3,11 @@ import { z } from 'zod';
 /** How a set was measured, as far as the file does not say it itself. */
 export const measurementSetup = z.object({
 	instrument: z.string().trim().max(200).default(''),
-	/** Test signal, rms, in V. */
-	signalLevel: z.number().positive().nullable().default(null),
-	/** For files without a column for it, in Hz. */
-	frequency: z.number().positive().nullable().default(null),
-	/** For files without a column for it, in °C. */
+	/** Test signal, rms. */
+	signalLevelVolts: z.number().positive().nullable().default(null),
+	/** For files without a column for it. */
+	frequencyHertz: z.number().positive().nullable().default(null),
+	/** For files without a column for it. */
 	temperatureCelsius: z.number().min(-273.15).nullable().default(null),
 	/** Stated systematic uncertainty U, relative: 0.003 is 0.3 %. `null` = not stated. */
 	uncertainty: z.number().min(0).lt(1).nullable().default(null),

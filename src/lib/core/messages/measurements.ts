@@ -19,11 +19,16 @@ export const measurementMessages = {
 	fileTooLarge: (limit: number) =>
 		`The file is larger than ${Math.round(limit / 1e6).toLocaleString('en')} MB, the most this server takes.`,
 	fileNameMissing: () => 'Say the file’s name: …/measurement-sets?filename=lot-a.csv',
-	duplicate: (fileName: string, at: string) =>
-		`This file was uploaded before, as ${fileName} on ${at.slice(0, 10)}.`,
+	duplicate: (fileName: string, partNumber: string, at: string) =>
+		`This file was uploaded before, as ${fileName} of ${partNumber} on ${at.slice(0, 10)}. Its readings count once.`,
+	reading: () => 'Reading the file',
+	judging: () => 'Looking for suspect sweeps',
+	storing: () => 'Storing the sweeps',
 	uploadNotFound: (id: number) => `There is no upload ${id}.`,
 	setNotFound: (id: number) => `There is no measurement set ${id}.`,
 	notReadYet: () => 'The file is still being read. Its columns can be mapped when that is done.',
+	cannotBeRead: () =>
+		'The file could not be read as a table, so there are no columns to map. Upload it again in another form.',
 	alreadyAccepted: () => 'This upload was accepted; its measurement set is there.',
 	alreadyImporting: () => 'This upload is being imported.',
 
@@ -37,8 +42,8 @@ export const measurementMessages = {
 	frequencyMissing: () =>
 		'No column is the frequency. Choose one, or state the frequency of the whole file.',
 	biasSignMissing: () => 'Say which sign the file gives a reverse bias.',
-	columnCount: (expected: number, actual: number) =>
-		`The file has ${count(expected, 'column')}; the mapping speaks of ${actual}.`,
+	columnUnknown: (header: string) => `The file has no column “${header}”.`,
+	mappingIncomplete: (messages: readonly string[]) => messages.join(' '),
 	waferLotDiffers: (lot: string, stored: string, stated: string) =>
 		`Lot ${lot} is known to come from wafer lot ${stored}; this upload says ${stated}.`,
 	waferLotTwice: (lot: string, first: string, second: string) =>

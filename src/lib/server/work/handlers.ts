@@ -1,11 +1,15 @@
 import { computeDistributions } from '../services/computeDistributions';
+import { importMeasurementSet } from '../services/importMeasurementSet';
 import { publishReleaseJob } from '../services/publishReleaseJob';
+import { readUpload } from '../services/readUpload';
 import { renderProof } from '../services/renderProof';
 import { verifyEvidence } from '../services/verifyEvidence';
 import type { JobHandler } from './jobHandler';
 
 /** Which service does which kind of job. */
 export const handlers: Readonly<Record<string, JobHandler>> = {
+	'read-upload': readUpload,
+	'import-measurement-set': importMeasurementSet,
 	'compute-distributions': computeDistributions,
 	'verify-evidence': verifyEvidence,
 	'render-proof': renderProof,
