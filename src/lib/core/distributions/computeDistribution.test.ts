@@ -130,3 +130,20 @@ it('is the same to the last bit in whatever order the devices come', () => {
 		)
 	);
 });
+
+it('finds no spread at all in devices that are all alike, in however many lots', () => {
+	fc.assert(
+		fc.property(
+			fc.double({ min: 1e-13, max: 1e-9, noNaN: true }),
+			fc.array(fc.integer({ min: 0, max: 2 }), { minLength: 2, maxLength: 40 }),
+			(value, lots) => {
+				const distribution = computeDistribution({
+					...input,
+					values: Float64Array.from(lots, () => value),
+					groupOf: Int32Array.from(lots)
+				});
+				expect(distribution?.standardDeviation).toBe(0);
+			}
+		)
+	);
+});

@@ -49,7 +49,8 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 
 	const groups = summarizeGroups(input);
 	const sampleSize = sorted.length;
-	const mean = sum(groups.map((of) => of.sampleSize * of.mean)) / sampleSize;
+	const transformed = sorted.map(TRANSFORMS[transform].apply);
+	const mean = meanOf(transformed);
 	const sumOfSquares = sum(
 		groups.map((of) => of.sumOfSquares + of.sampleSize * (of.mean - mean) ** 2)
 	);
@@ -65,7 +66,7 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 		mean,
 		standardDeviation: sampleSize > 1 ? Math.sqrt(sumOfSquares / (sampleSize - 1)) : 0,
 		// Two devices can't lean to a side.
-		skewness: sampleSize < 3 ? 0 : skewness(sorted.map(TRANSFORMS[transform].apply)),
+		skewness: sampleSize < 3 ? 0 : skewness(transformed),
 		quantiles: STORED_PROBABILITIES.map((probability) => ({
 			probability,
 			value: quantile(sorted, probability)

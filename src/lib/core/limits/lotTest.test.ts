@@ -6,8 +6,12 @@ import { lotTest } from './lotTest';
 it('has the F and p that R finds', () => {
 	const found = lotTest(threeSmallLots());
 	expect(found).toMatchObject({ lots: 3, betweenDegrees: 2, withinDegrees: 9 });
-	expect(found?.meanSquareBetween).toBeCloseTo(0.001119866534416, 14);
-	expect(found?.meanSquareWithin).toBeCloseTo(0.0001177040163004, 15);
+	// sqrt of the mean squares' combination: effective lot size (12 − 50/12)/2
+	expect(found?.spreadWithin).toBeCloseTo(Math.sqrt(0.0001177040163004), 12);
+	expect(found?.spreadBetween).toBeCloseTo(
+		Math.sqrt((0.001119866534416 - 0.0001177040163004) / ((12 - 50 / 12) / 2)),
+		12
+	);
 	expect(found?.F).toBeCloseTo(9.51425932278709, 9);
 	expect(found?.p).toBeCloseTo(0.0060240787311714, 12);
 });

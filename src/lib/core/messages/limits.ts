@@ -1,6 +1,8 @@
 const plural = (count: number, one: string, many = `${one}s`) =>
 	`${count} ${count === 1 ? one : many}`;
 
+const quoted = (got: string | undefined) => (got === undefined ? 'nothing' : `"${got}"`);
+
 export const limitMessages = {
 	methodNotYet: (method: string) =>
 		`Limits of the method “${method}” aren't computed before the engine's next step. Choose a policy with “normal” or “sigma”.`,
@@ -25,9 +27,21 @@ export const limitMessages = {
 		`Capacitance was not measured at ${frequency} Hz; it was at ${measured.map((at) => `${at} Hz`).join(', ')}.`,
 	severalFrequencies: (measured: readonly number[]) =>
 		`Capacitance was measured at ${measured.map((at) => `${at} Hz`).join(' and ')}; say which is meant.`,
-	noSuchPolicy: (id: number) => `There is no policy version ${id}.`,
+	noSuchPolicy: (id: number | undefined) =>
+		id === undefined ? 'There is no limit policy yet.' : `There is no policy version ${id}.`,
+	noSuchProduct: (partNumber: string) => `There is no product ${partNumber}.`,
 	computingAt: (temperature: number) => `Distributions at ${temperature} °C`,
 	computed: (count: number) => `${plural(count, 'distribution')} computed`,
+	expectsTemperature: (got: string | undefined) =>
+		`temperatureCelsius: expected a number of °C, got ${quoted(got)}.`,
+	expectsFrequency: (got: string | undefined) =>
+		`frequency: expected a number of Hz above zero, got ${quoted(got)}.`,
+	expectsBiases: (got: string | undefined) =>
+		`biases: expected at most 1000 numbers of V with commas between, got ${quoted(got)}.`,
+	expectsPolicy: (got: string | undefined) =>
+		`policy: expected the id of a policy version, got ${quoted(got)}.`,
+	expectsBasis: (got: string | undefined, known: readonly string[]) =>
+		`basis: expected one of ${known.join(', ')}, got ${quoted(got)}.`,
 	noDistributions: () =>
 		'This product has no distributions yet: accept a measurement set, and its limits follow.',
 	sigmaNeedsTest: (k: number) =>

@@ -15,6 +15,7 @@ export interface FDegrees {
  */
 export function fUpperTail(x: number, { numerator, denominator }: FDegrees): number {
 	if (x <= 0) return 1;
+	if (x === Infinity) return 0;
 	const total = denominator + numerator * x;
 	return incompleteBeta(
 		denominator / 2,
