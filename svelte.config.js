@@ -8,7 +8,7 @@ export default {
 		adapter: adapter({ out: 'build' }),
 		alias: {
 			// The package's own index pulls in every validator it knows; Platen uses one.
-			'superforms-zod': 'node_modules/sveltekit-superforms/dist/adapters/zod4.js'
+			'superforms-zod': 'node_modules/sveltekit-superforms/dist/adapters/zod4'
 		},
 		// Platen checks the origin of every cookie request itself, whatever its content type, and lets
 		// bearer requests come from anywhere: see hooks.server.ts.

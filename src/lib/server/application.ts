@@ -1,3 +1,4 @@
+import { keepAuditHead } from './auditHead';
 import { attempts } from './auth/attempts';
 import type { Attempts } from './auth/attempts';
 import { openSessions } from './auth/sessions';
@@ -29,7 +30,7 @@ export interface Application extends Stores {
 }
 
 const QUARTER_HOUR = 900;
-const SETTLE_EVERY_MILLISECONDS = 30_000;
+const SETTLE_EVERY_MILLISECONDS = 10_000;
 
 let opened: { readonly application: Application; readonly close: () => Promise<void> } | undefined;
 
@@ -50,9 +51,12 @@ export async function openApplication(
 		thread: { databaseUrl: config.databaseUrl, storageFolder: config.storageFolder }
 	});
 	const changes = watchChanges(db);
-	const settling = setInterval(() => {
-		settleDueReleases({ db }).catch((problem: unknown) => log.error({ err: problem }));
-	}, SETTLE_EVERY_MILLISECONDS);
+	const settle = () =>
+		Promise.all([settleDueReleases({ db }), keepAuditHead(db, config.dataDir)]).catch(
+			(problem: unknown) => log.error({ err: problem })
+		);
+	await settle();
+	const settling = setInterval(() => void settle(), SETTLE_EVERY_MILLISECONDS);
 	const application: Application = {
 		config,
 		log,
@@ -69,6 +73,7 @@ export async function openApplication(
 			changes.stop();
 			clearInterval(settling);
 			await runner.stop();
+			await settle();
 			close();
 		}
 	};

@@ -7,7 +7,16 @@ export type Connection = LibSQLDatabase<typeof schema>;
 /** What a query asks: a connection and a transaction alike. */
 export type Database = Pick<
 	Connection,
-	'select' | 'selectDistinct' | 'insert' | 'update' | 'delete' | 'query' | 'run' | 'all' | 'get' | 'values'
+	| 'select'
+	| 'selectDistinct'
+	| 'insert'
+	| 'update'
+	| 'delete'
+	| 'query'
+	| 'run'
+	| 'all'
+	| 'get'
+	| 'values'
 >;
 
 /** An open transaction, as `write` hands it out. */

@@ -1,10 +1,11 @@
-import { aliasedTable, and, asc, eq, gt, gte, notExists } from 'drizzle-orm';
+import { and, asc, eq, gt, gte, notExists } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/sqlite-core';
 import type { Database } from './database';
 import { job } from './schema';
 
 /** Jobs of this person that failed since an instant and were not tried again. */
 export function listFailedJobs(db: Database, by: string, since: string) {
-	const later = aliasedTable(job, 'later');
+	const later = alias(job, 'later');
 	const successor = db
 		.select({ id: later.id })
 		.from(later)

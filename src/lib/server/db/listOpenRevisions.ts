@@ -1,4 +1,5 @@
-import { aliasedTable, and, asc, eq, inArray, sql } from 'drizzle-orm';
+import { and, asc, eq, inArray, sql } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/sqlite-core';
 import { OPEN_REVISION_STATES } from '$lib/core/review/states';
 import type { Database } from './database';
 import { decision, person, product, revision, verificationRow } from './schema';
@@ -10,7 +11,7 @@ const rowsIn = (state: 'ticked' | 'flagged' | 'open') =>
 
 /** Revisions in review or approved, oldest first, with who did what and how many rows are verified. */
 export function listOpenRevisions(db: Database) {
-	const approver = aliasedTable(person, 'approver');
+	const approver = alias(person, 'approver');
 	return db
 		.select({
 			partNumber: product.partNumber,

@@ -1,10 +1,11 @@
-import { aliasedTable, and, asc, count, eq, gt, notExists } from 'drizzle-orm';
+import { and, asc, count, eq, gt, notExists } from 'drizzle-orm';
+import { alias } from 'drizzle-orm/sqlite-core';
 import type { Database } from './database';
 import { comment, decision, person, product, revision } from './schema';
 
 /** Returned revisions that no later one followed, submitted by this person: drafts to go on with. */
 export function listReturnedRevisions(db: Database, submitter: string) {
-	const later = aliasedTable(revision, 'later');
+	const later = alias(revision, 'later');
 	const successor = db
 		.select({ id: later.id })
 		.from(later)

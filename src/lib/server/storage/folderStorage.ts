@@ -1,6 +1,6 @@
 import { createHash, randomUUID } from 'node:crypto';
-import { createReadStream } from 'node:fs';
-import { mkdir, open, readFile, rename, rm } from 'node:fs/promises';
+import { constants, createReadStream } from 'node:fs';
+import { access, mkdir, open, readFile, rename, rm } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import { FileTooLargeError } from './storage';
 import type { Storage, StoredFile } from './storage';
@@ -43,7 +43,12 @@ export function folderStorage(root: string): Storage {
 		putStream,
 		put: (bytes) => putStream(once(bytes)),
 		read: (key) => readFile(pathOf(key)),
-		stream: (key) => createReadStream(pathOf(key))
+		stream: (key) => createReadStream(pathOf(key)),
+		isWritable: () =>
+			access(root, constants.W_OK).then(
+				() => true,
+				() => false
+			)
 	};
 }
 

@@ -19,6 +19,7 @@ export interface Storage {
 	putStream(source: AsyncIterable<Uint8Array>, limit?: number): Promise<StoredFile>;
 	read(key: string): Promise<Buffer>;
 	stream(key: string): Readable;
+	isWritable(): Promise<boolean>;
 }
 
 export class FileTooLargeError extends Error {

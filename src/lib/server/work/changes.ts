@@ -4,8 +4,11 @@ import type { Connection } from '../db/database';
 const LOOK_EVERY_MILLISECONDS = 400;
 
 export interface Changes {
-	/** Calls back after something was committed, by whatever process; answers how to stop. */
-	listen(onChange: () => void): () => void;
+	/**
+	 * Calls back after something was committed, by whatever process, and when there will be nothing
+	 * more to hear; answers how to stop listening.
+	 */
+	listen(onChange: () => void, onEnd: () => void): () => void;
 	stop(): void;
 }
 
@@ -14,25 +17,31 @@ export interface Changes {
  * every use case leaves behind, the newest audit row, and at the progress of jobs.
  */
 export function watchChanges(db: Connection): Changes {
-	const listeners = new Set<() => void>();
+	const listeners = new Map<
+		object,
+		{ readonly onChange: () => void; readonly onEnd: () => void }
+	>();
 	let seen: string | undefined;
 	let timer: NodeJS.Timeout | undefined;
 
 	async function look(): Promise<void> {
 		const now = await stateOf(db).catch(() => seen);
-		if (seen !== undefined && now !== seen) for (const tell of listeners) tell();
+		if (seen !== undefined && now !== seen)
+			for (const { onChange } of listeners.values()) onChange();
 		seen = now;
 		timer = listeners.size > 0 ? setTimeout(() => void look(), LOOK_EVERY_MILLISECONDS) : undefined;
 	}
 
 	return {
-		listen(onChange) {
-			listeners.add(onChange);
+		listen(onChange, onEnd) {
+			const key = {};
+			listeners.set(key, { onChange, onEnd });
 			timer ??= setTimeout(() => void look(), 0);
-			return () => listeners.delete(onChange);
+			return () => listeners.delete(key);
 		},
 		stop() {
 			clearTimeout(timer);
+			for (const { onEnd } of [...listeners.values()]) onEnd();
 			listeners.clear();
 		}
 	};
