@@ -1,0 +1,227 @@
+import { PDFHexString } from 'pdf-lib';
+import type { Box, DiscBox, Ink, RectangleBox, RuleBox, Tag, TextBox } from '../layout/box';
+import type { Colour, DrawnMark, PathStep } from '../layout/drawnMark';
+import { decimal } from './decimal';
+import type { FontBook } from './FontBook';
+
+/** Inks as operators: grey rules are 60 % black, verdigris is #0E6656. */
+const INKS: Record<Ink, Colour> = {
+	black: [0, 0, 0],
+	grey: [0.4, 0.4, 0.4],
+	verdigris: [14 / 255, 102 / 255, 86 / 255],
+	white: [1, 1, 1]
+};
+
+/** A stretch of a page's content that belongs to a node of the tag tree. */
+export interface MarkedContent {
+	readonly node: number;
+	readonly id: number;
+}
+
+/** Turns boxes into the operators of one page. Places are given from above, PDF counts from below. */
+export class PageWriter {
+	readonly #height: number;
+	readonly #fonts: FontBook;
+	readonly #operators: string[] = [];
+	readonly #marked: MarkedContent[] = [];
+
+	constructor(height: number, fonts: FontBook) {
+		this.#height = height;
+		this.#fonts = fonts;
+	}
+
+	/** Writes boxes in order; neighbours of one tag share one stretch of marked content. */
+	write(boxes: readonly Box[], roleOf: (node: number) => string): void {
+		let open: Tag | undefined;
+		for (const box of boxes) {
+			if (box.tag !== open) {
+				if (open !== undefined) this.#add('EMC');
+				this.#add(box.tag === null ? '/Artifact BMC' : this.#begin(box.tag, roleOf(box.tag)));
+				open = box.tag;
+			}
+			this.#box(box);
+		}
+		if (open !== undefined) this.#add('EMC');
+	}
+
+	get content(): string {
+		return this.#operators.join('\n');
+	}
+
+	/** In the order of their ids. */
+	get marked(): readonly MarkedContent[] {
+		return this.#marked;
+	}
+
+	#begin(node: number, role: string): string {
+		const id = this.#marked.length;
+		this.#marked.push({ node, id });
+		return `/${role} <</MCID ${id}>> BDC`;
+	}
+
+	#add(...operators: string[]) {
+		this.#operators.push(...operators);
+	}
+
+	#box(box: Box): void {
+		switch (box.kind) {
+			case 'text':
+				return this.#text(box);
+			case 'rule':
+				return this.#rule(box);
+			case 'rectangle':
+				return this.#rectangle(box);
+			case 'disc':
+				return this.#disc(box);
+			case 'drawing':
+				this.#add('q', `1 0 0 1 ${this.#point(box.x, box.y)} cm`);
+				box.marks.forEach((mark) => this.#mark(mark));
+				this.#add('Q');
+				return;
+			default:
+				return box satisfies never;
+		}
+	}
+
+	#point(x: number, y: number): string {
+		return `${decimal(x)} ${decimal(this.#height - y)}`;
+	}
+
+	#text(box: TextBox): void {
+		const lines = [`${paint(INKS[box.ink ?? 'black'])} rg`, 'BT'];
+		let along = 0;
+		for (const piece of box.pieces) {
+			const { name, operand } = this.#fonts.encode(piece.face, piece.text, piece.kerning);
+			const rise = piece.rise ?? 0;
+			const matrix = box.turned
+				? `0 -1 1 0 ${this.#point(box.x + rise, box.y + along)}`
+				: `1 0 0 1 ${this.#point(box.x + along, box.y - rise)}`;
+			lines.push(
+				`/${name} ${decimal(piece.size)} Tf`,
+				...(piece.tracking ? [`${decimal(piece.tracking)} Tc`] : []),
+				`${matrix} Tm`,
+				`${operand} TJ`,
+				...(piece.tracking ? ['0 Tc'] : [])
+			);
+			along += piece.width + (piece.after ?? 0);
+		}
+		lines.push('ET');
+		if (box.actual === undefined) this.#add(...lines);
+		else
+			this.#add(
+				`/Span <</ActualText ${PDFHexString.fromText(box.actual).toString()}>> BDC`,
+				...lines,
+				'EMC'
+			);
+	}
+
+	#rule(box: RuleBox): void {
+		this.#add(
+			`${paint(INKS[box.ink ?? 'black'])} RG ${decimal(box.weight)} w ${dashes(box.dash)}`,
+			`${this.#point(...box.from)} m ${this.#point(...box.to)} l S`
+		);
+	}
+
+	#rectangle(box: RectangleBox): void {
+		const place = `${this.#point(box.x, box.y + box.height)} ${decimal(box.width)} ${decimal(box.height)} re`;
+		if (box.fill) this.#add(`${paint(INKS[box.fill])} rg`, `${place} f`);
+		if (box.stroke)
+			this.#add(
+				`${paint(INKS[box.stroke])} RG ${decimal(box.weight ?? 0.5)} w ${dashes(box.dash)}`,
+				`${place} S`
+			);
+	}
+
+	/** Full disc, left half filled, ring, or dashed ring; the outline lies inside the radius. */
+	#disc(box: DiscBox): void {
+		const weight = 0.7;
+		const radius = box.radius - weight / 2;
+		const steps = circle(box.radius, box.look === 'half' ? 0.5 : 1);
+		this.#add('q', `1 0 0 1 ${this.#point(box.x, box.y)} cm`, '0 0 0 rg 0 0 0 RG');
+		if (box.look === 'full' || box.look === 'half') this.#add(path(steps), 'f');
+		if (box.look !== 'full')
+			this.#add(
+				`${weight} w ${dashes(box.look === 'dashed ring' ? [1.1, 1.1] : undefined)}`,
+				path(circle(radius, 1)),
+				's'
+			);
+		this.#add('Q');
+	}
+
+	#mark(mark: DrawnMark): void {
+		switch (mark.kind) {
+			case 'path':
+				if (mark.fill) this.#add(`${paint(mark.fill)} rg`, path(mark.steps), 'f');
+				if (mark.stroke)
+					this.#add(
+						`${paint(mark.stroke.colour)} RG ${decimal(mark.stroke.width)} w ${mark.stroke.cap} J ${mark.stroke.join} j ${dashes(mark.stroke.dash)}`,
+						path(mark.steps),
+						'S'
+					);
+				return;
+			case 'text': {
+				const { name, operand } = this.#fonts.encode(mark.face, mark.text);
+				const angle = (mark.angle * Math.PI) / 180;
+				const [cosine, sine] = [Math.cos(angle), Math.sin(angle)];
+				this.#add(
+					`${paint(mark.colour)} rg`,
+					`BT /${name} ${decimal(mark.size)} Tf`,
+					`${[cosine, sine, -sine, cosine, mark.at[0], -mark.at[1]].map(decimal).join(' ')} Tm`,
+					`${operand} TJ ET`
+				);
+				return;
+			}
+			case 'clip':
+				this.#add('q', path(mark.steps), 'W n');
+				return;
+			case 'restore':
+				this.#add('Q');
+				return;
+			default:
+				return mark satisfies never;
+		}
+	}
+}
+
+const paint = (colour: Colour) => colour.map(decimal).join(' ');
+
+const dashes = (dash: readonly number[] | undefined) =>
+	`[${(dash ?? []).map(decimal).join(' ')}] 0 d`;
+
+/** Path operators of steps given from above; the origin is the drawing's upper left corner. */
+function path(steps: readonly PathStep[]): string {
+	const point = ([x, y]: readonly [number, number]) => `${decimal(x)} ${decimal(-y)}`;
+	return steps
+		.map((step) => {
+			switch (step.to) {
+				case 'move':
+					return `${point(step.at)} m`;
+				case 'line':
+					return `${point(step.at)} l`;
+				case 'curve':
+					return `${point(step.by)} ${point(step.then)} ${point(step.at)} c`;
+				case 'close':
+					return 'h';
+				default:
+					return step satisfies never;
+			}
+		})
+		.join('\n');
+}
+
+/** A circle about the origin, or its left half. */
+function circle(radius: number, share: 1 | 0.5): PathStep[] {
+	const handle = 0.5523 * radius;
+	const left: PathStep[] = [
+		{ to: 'move', at: [0, -radius] },
+		{ to: 'curve', by: [-handle, -radius], then: [-radius, -handle], at: [-radius, 0] },
+		{ to: 'curve', by: [-radius, handle], then: [-handle, radius], at: [0, radius] }
+	];
+	if (share === 0.5) return [...left, { to: 'close' }];
+	return [
+		...left,
+		{ to: 'curve', by: [handle, radius], then: [radius, handle], at: [radius, 0] },
+		{ to: 'curve', by: [radius, -handle], then: [handle, -radius], at: [0, -radius] },
+		{ to: 'close' }
+	];
+}
