@@ -104,3 +104,16 @@ export function dieFactsOf(form: DieForm): DieFacts {
 		junction: form.junction
 	};
 }
+
+/** What a second editor is told the fields are called. */
+export const DIE_FIELD_NAMES = {
+	name: 'name',
+	area: 'area in mm²',
+	conductivity: 'conductivity',
+	junction: 'junction',
+	materialName: 'material',
+	relativePermittivity: 'relative permittivity',
+	conductionStates: 'conduction band, cm⁻³',
+	valenceStates: 'valence band, cm⁻³',
+	source: 'source'
+} as const satisfies Partial<Record<keyof DieForm, string>>;

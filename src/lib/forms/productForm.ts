@@ -82,8 +82,9 @@ export function withRow(form: ProductForm): ProductForm {
 	return { ...form, ...grown };
 }
 
-/** The form without one row of ordering codes. */
+/** The form without one row of ordering codes; as it is when there is no such row. */
 export function withoutRow(form: ProductForm, row: number): ProductForm {
+	if (row < 0 || row >= form.code.length) return form;
 	const shrunk = Object.fromEntries(
 		CODE_COLUMNS.map((name) => [name, form[name].toSpliced(row, 1)])
 	);
@@ -117,3 +118,23 @@ export function productFields(stored: {
 		rowVersion: rest.rowVersion
 	};
 }
+
+/** Which row the button *Remove* of a plain form names; −1 when it names none. */
+export function rowToRemove(entries: FormData): number {
+	const row = entries.get('row');
+	return typeof row === 'string' && /^\d{1,3}$/.test(row) ? Number(row) : -1;
+}
+
+/** What a second editor is told the fields are called. */
+export const PRODUCT_FIELD_NAMES = {
+	die: 'die',
+	elements: 'elements',
+	productClass: 'class',
+	package: 'package',
+	description: 'description',
+	code: 'ordering codes',
+	grade: 'grades',
+	marking: 'markings',
+	packing: 'packings',
+	quantity: 'quantities'
+} as const satisfies Partial<Record<keyof ProductForm, string>>;

@@ -1,3 +1,5 @@
+import { isPermitted, type Role } from '../review/permissions';
+
 const count = (size: number, one: string, many = `${one}s`) => `${size} ${size === 1 ? one : many}`;
 
 export const worklistMessages = {
@@ -6,14 +8,25 @@ export const worklistMessages = {
 			? `1 thing waits for you, since ${oldest}.`
 			: `${things} things wait for you. The oldest came on ${oldest}.`,
 	nothing: () => 'Nothing waits for you.',
+	/** What can stand in the worklist of somebody with these roles. */
+	expected: (roles: readonly Role[]): string[] => [
+		...(isPermitted(roles, 'verdict.give')
+			? ['Devices in quarantine, files to map, and revisions that come back to you.']
+			: []),
+		...(isPermitted(roles, 'revision.verify')
+			? ['Revisions to verify, except those you had a hand in.']
+			: []),
+		...(isPermitted(roles, 'release.publish') ? ['Approved revisions, to publish.'] : []),
+		'Work of yours that failed.'
+	],
 
 	devices: (size: number) => count(size, 'device'),
 	files: (size: number) => count(size, 'file'),
 	revisions: (size: number) => count(size, 'revision'),
 	jobs: (size: number) => count(size, 'job'),
 
-	quarantined: (devices: number, lots: readonly string[]) =>
-		`${count(devices, 'device')} of ${lots.join(', ')} ${devices === 1 ? 'waits' : 'wait'} for a verdict.`,
+	quarantined: (devices: number, set: number) =>
+		`${count(devices, 'device')} of measurement set ${set} ${devices === 1 ? 'waits' : 'wait'} for a verdict.`,
 	quarantinedNote: () =>
 		'Left out of the distributions until somebody keeps or excludes them. The rest of the set is in use.',
 	toMap: (fileName: string) => `${fileName} is read and waits for its mapping.`,
