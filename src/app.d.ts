@@ -2,6 +2,7 @@ import type { Asking } from '$lib/server/auth/requirePermission';
 import type { Attempts } from '$lib/server/auth/attempts';
 import type { Sessions } from '$lib/server/auth/sessions';
 import type { Changes } from '$lib/server/work/changes';
+import type { AuditHead } from '$lib/server/db/verifyAuditChain';
 import type { Connection } from '$lib/server/db/database';
 import type { Log } from '$lib/server/logging';
 import type { Storage } from '$lib/server/storage/storage';
@@ -19,7 +20,11 @@ declare global {
 			/** Failed sign-ins, by address and by email. */
 			signInAttempts: Attempts;
 			changes: Changes;
+			/** The largest measurement file that is taken, in bytes. */
+			uploadLimit: number;
 			isDemo: boolean;
+			/** The newest audit row as it is known outside the database. */
+			auditHead: () => Promise<AuditHead | undefined>;
 			sessionId: string | null;
 			requestId: string;
 			log: Log;

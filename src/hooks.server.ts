@@ -1,10 +1,20 @@
 import { randomUUID } from 'node:crypto';
 import type { Handle, HandleServerError, ServerInit } from '@sveltejs/kit';
 import { sequence } from '@sveltejs/kit/hooks';
-import { badToken, notFound, ourFault, tooManyAttempts, wrongOrigin } from '$lib/core/messages';
+import {
+	badToken,
+	bodyLengthNeeded,
+	bodyTooLarge,
+	notFound,
+	ourFault,
+	tooManyAttempts,
+	wrongOrigin
+} from '$lib/core/messages';
 import { application, closeApplication, openApplication } from '$lib/server/application';
+import { readAuditHead } from '$lib/server/auditHead';
 import { personOfSession } from '$lib/server/auth/personOfSession';
 import { personOfToken } from '$lib/server/auth/personOfToken';
+import { bodyLimit } from '$lib/server/auth/bodyLimit';
 import { problem } from '$lib/server/problem';
 
 export const init: ServerInit = async () => {
@@ -26,7 +36,9 @@ const request: Handle = async ({ event, resolve }) => {
 	event.locals.sessions = sessions;
 	event.locals.signInAttempts = signInAttempts;
 	event.locals.changes = changes;
+	event.locals.uploadLimit = config.uploadLimitBytes;
 	event.locals.isDemo = config.isDemo;
+	event.locals.auditHead = () => readAuditHead(config.dataDir);
 	event.locals.log = log.child({ requestId });
 	event.locals.person = null;
 	event.locals.sessionId = null;
@@ -78,6 +90,18 @@ const person: Handle = async ({ event, resolve }) => {
 	return resolve(event);
 };
 
+/** Bodies are small, except where a measurement file comes; there the service counts the bytes. */
+const bodies: Handle = async ({ event, resolve }) => {
+	const { headers: said, body } = event.request;
+	if (body === null) return resolve(event);
+	const limit = bodyLimit(event.url.pathname);
+	const length = said.get('content-length');
+	const refuse = (status: number, message: string) =>
+		event.locals.isApi ? problem(status, message) : new Response(message, { status });
+	if (length === null && limit !== Infinity) return refuse(411, bodyLengthNeeded());
+	return Number(length) > limit ? refuse(413, bodyTooLarge(limit)) : resolve(event);
+};
+
 /** What the framework's content security policy does not say. */
 const headers: Handle = async ({ event, resolve }) => {
 	const response = await resolve(event);
@@ -112,7 +136,7 @@ async function detailOf(response: Response, requestId: string): Promise<string> 
 	return response.status >= 500 ? ourFault(requestId) : text.slice(0, 500);
 }
 
-export const handle = sequence(headers, request, problems, person);
+export const handle = sequence(headers, request, bodies, problems, person);
 
 export const handleError: HandleServerError = ({ error, event, status, message }) => {
 	const { requestId } = event.locals;

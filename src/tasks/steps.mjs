@@ -27,22 +27,33 @@ const SOURCES = [
 	'tsconfig.json'
 ];
 
-/** Runs a program to its end; rejects with the command when it fails. */
+/**
+ * Runs a program to its end; rejects with the command when it fails.
+ *
+ * @param {string} command
+ * @param {readonly string[]} args
+ * @param {{ env?: NodeJS.ProcessEnv, quiet?: boolean }} [options]
+ * @returns {Promise<void>}
+ */
 export function run(command, args, { env = process.env, quiet = false } = {}) {
 	return new Promise((done, failed) => {
-		const child = spawn(command, args, {
+		const child = spawn(command, [...args], {
 			cwd: ROOT,
 			env,
 			stdio: quiet ? ['ignore', 'ignore', 'inherit'] : ['ignore', 'inherit', 'inherit']
 		});
 		child.on('error', failed);
 		child.on('exit', (code, signal) => {
-			if (code === 0) done(undefined);
+			if (code === 0) done();
 			else failed(new Error(`${command} ${args.join(' ')} ended with ${signal ?? code}`));
 		});
 	});
 }
 
+/**
+ * @param {string} path
+ * @returns {string[]}
+ */
 function files(path) {
 	const whole = join(ROOT, path);
 	if (!existsSync(whole)) return [];
@@ -51,6 +62,7 @@ function files(path) {
 	return entries.flatMap((entry) => files(join(path, entry)));
 }
 
+/** @param {string} path */
 function safeEntries(path) {
 	try {
 		return readdirSync(path).sort();
@@ -59,6 +71,7 @@ function safeEntries(path) {
 	}
 }
 
+/** @param {readonly string[]} paths */
 function hashOf(paths) {
 	const hash = createHash('sha256');
 	for (const path of paths.flatMap(files)) {
@@ -71,6 +84,7 @@ function hashOf(paths) {
 	return hash.digest('hex');
 }
 
+/** @param {string} path */
 const written = (path) => (existsSync(path) ? readFileSync(path, 'utf8') : '');
 
 /** Installs what the lock file names, once for each content of it. */
@@ -90,6 +104,7 @@ export async function build() {
 	writeFileSync(BUILT, wanted);
 }
 
+/** @param {number} pid */
 function isAlive(pid) {
 	try {
 		process.kill(pid, 0);
@@ -99,7 +114,13 @@ function isAlive(pid) {
 	}
 }
 
-/** One process installs and builds at a time; two copies may be started together. */
+/**
+ * One process installs and builds at a time; two copies may be started together.
+ *
+ * @template Result
+ * @param {() => Promise<Result>} work
+ * @returns {Promise<Result>}
+ */
 export async function alone(work) {
 	mkdirSync(join(ROOT, 'node_modules'), { recursive: true });
 	for (;;) {
@@ -107,7 +128,8 @@ export async function alone(work) {
 			writeFileSync(LOCK, String(process.pid), { flag: 'wx' });
 			break;
 		} catch (problem) {
-			if (problem.code !== 'EEXIST') throw problem;
+			if (!(problem instanceof Error && 'code' in problem && problem.code === 'EEXIST'))
+				throw problem;
 			if (!isAlive(Number(written(LOCK)))) rmSync(LOCK, { force: true });
 			else await new Promise((next) => setTimeout(next, 500));
 		}
@@ -119,7 +141,14 @@ export async function alone(work) {
 	}
 }
 
-/** Says what is done and how long it took. */
+/**
+ * Says what is done and how long it took.
+ *
+ * @template Result
+ * @param {string} name
+ * @param {() => Promise<Result>} work
+ * @returns {Promise<Result>}
+ */
 export async function step(name, work) {
 	process.stdout.write(`${name} …\n`);
 	const start = Date.now();

@@ -96,7 +96,7 @@ export const LAYERS: Readonly<Record<string, Layer>> = {
 		)
 	},
 	'composition roots': {
-		files: /^src\/(hooks\.server\.ts|app\.d\.ts|tasks\/|lib\/server\/application\.ts)/,
+		files: /^src\/(hooks\.server\.ts|app\.d\.ts|tasks\/|lib\/server\/(application|auditHead)\.ts)/,
 		own: /^src\/(lib\/(core|server)|tasks)\//,
 		packages: /.*/
 	}
