@@ -15,6 +15,11 @@ export const mayNot = (permission: Permission) => {
 export const wrongOrigin = () =>
 	'The request did not come from this address. Open the page again and repeat it; nothing was changed.';
 
+export const bodyTooLarge = (limit: number) =>
+	`The request is larger than ${limit / 1e6} MB, the most that is taken here.`;
+
+export const bodyLengthNeeded = () => 'Say how long the request is, with Content-Length.';
+
 export const badToken = () =>
 	'The access token is unknown, revoked, or its owner can no longer sign in.';
 

@@ -18,6 +18,7 @@ const environment = z.object({
 		.string()
 		.regex(/^file:/, 'expected file:')
 		.optional(),
+	UPLOAD_LIMIT_MB: z.coerce.number('expected a number').positive().default(512),
 	DEMO: z.enum(['0', '1']).default('0'),
 	LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error', 'silent']).default('info')
 });
@@ -31,6 +32,8 @@ export interface Config {
 	readonly databaseUrl: string;
 	/** The folder published files and uploads lie in. */
 	readonly storageFolder: string;
+	/** The largest measurement file that is taken. */
+	readonly uploadLimitBytes: number;
 	readonly isDemo: boolean;
 	readonly logLevel: 'debug' | 'info' | 'warn' | 'error' | 'silent';
 	/** The built worker thread. */
@@ -67,6 +70,7 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
 				? join(dataDir, 'files')
 				: resolve(STORAGE_URL.slice('file:'.length))
 		),
+		uploadLimitBytes: read.data.UPLOAD_LIMIT_MB * 1e6,
 		isDemo: DEMO === '1',
 		logLevel: LOG_LEVEL,
 		workerEntry: resolve('build/tasks/worker.js')

@@ -33,6 +33,7 @@ export const measurementMessages = {
 	alreadyImporting: () => 'This upload is being imported.',
 
 	// The mapping
+	notAMapping: () => 'The body isn’t a mapping; `errors` says where.',
 	columnMissing: (meaning: ColumnMeaning) => `No column is the ${MEANING_NAMES[meaning]}.`,
 	columnTwice: (meaning: ColumnMeaning) =>
 		`Two columns are the ${MEANING_NAMES[meaning]}; choose one.`,
