@@ -1,5 +1,3 @@
-import { isPermitted, type Role } from '../review/permissions';
-
 const count = (size: number, one: string, many = `${one}s`) => `${size} ${size === 1 ? one : many}`;
 
 export const worklistMessages = {
@@ -8,15 +6,17 @@ export const worklistMessages = {
 			? `1 thing waits for you, since ${oldest}.`
 			: `${things} things wait for you. The oldest came on ${oldest}.`,
 	nothing: () => 'Nothing waits for you.',
-	/** What can stand in the worklist of somebody with these roles. */
-	expected: (roles: readonly Role[]): string[] => [
-		...(isPermitted(roles, 'verdict.give')
+	/** What can stand in the worklist of somebody who may do these things. */
+	expected: (may: {
+		readonly giveVerdicts: boolean;
+		readonly verify: boolean;
+		readonly publish: boolean;
+	}): string[] => [
+		...(may.giveVerdicts
 			? ['Devices in quarantine, files to map, and revisions that come back to you.']
 			: []),
-		...(isPermitted(roles, 'revision.verify')
-			? ['Revisions to verify, except those you had a hand in.']
-			: []),
-		...(isPermitted(roles, 'release.publish') ? ['Approved revisions, to publish.'] : []),
+		...(may.verify ? ['Revisions to verify, except those you had a hand in.'] : []),
+		...(may.publish ? ['Approved revisions, to publish.'] : []),
 		'Work of yours that failed.'
 	],
 

@@ -15,7 +15,11 @@ export const load: PageServerLoad = async ({ locals, depends }) => {
 			oldest === undefined
 				? worklistMessages.nothing()
 				: worklistMessages.summary(countWaiting(groups), oldest.slice(0, 10)),
-		expected: worklistMessages.expected(person.roles),
+		expected: worklistMessages.expected({
+			giveVerdicts: isPermitted(person.roles, 'verdict.give'),
+			verify: isPermitted(person.roles, 'revision.verify'),
+			publish: isPermitted(person.roles, 'release.publish')
+		}),
 		canReadProducts: isPermitted(person.roles, 'product.read')
 	};
 };
