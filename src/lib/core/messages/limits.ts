@@ -42,6 +42,14 @@ export const limitMessages = {
 		`policy: expected the id of a policy version, got ${quoted(got)}.`,
 	expectsBasis: (got: string | undefined, known: readonly string[]) =>
 		`basis: expected one of ${known.join(', ')}, got ${quoted(got)}.`,
+	computing: (hasOlder: boolean) =>
+		hasOlder
+			? 'Distributions are computed from newer data. The numbers below are the previous ones until then; this page follows by itself.'
+			: 'Distributions are computed from the accepted measurements. This page follows by itself.',
+	waitsForTurn: () => 'Waits for its turn',
+	nothingYetTitle: () => 'No capacitance is measured yet',
+	caution: () =>
+		'Typical values are medians and not guaranteed. Statistical limits rest on the lots measured and don’t replace production test. Each number leads to its derivation.',
 	noDistributions: () =>
 		'This product has no distributions yet: accept a measurement set, and its limits follow.',
 	sigmaNeedsTest: (k: number) =>
