@@ -1,7 +1,7 @@
 import { AFRelationship } from 'pdf-lib';
 import { canonicalBytes } from '../../core/datasheet/canonicalBytes';
-import type { DatasheetDocument, PrintedNumber } from '../../core/datasheet/document';
-import { BASIS_MARKS } from '../../core/limits/basis';
+import { capacitanceTableCsv } from '../../core/datasheet/capacitanceTableCsv';
+import type { DatasheetDocument } from '../../core/datasheet/document';
 
 /** A file that travels inside the PDF. */
 export interface EmbeddedFile {
@@ -15,7 +15,7 @@ export interface EmbeddedFile {
 
 /** The document itself, and its capacitance tables as a spreadsheet can read them. */
 export function attachedFiles(document: DatasheetDocument): EmbeddedFile[] {
-	const table = capacitanceCsv(document);
+	const hasTable = document.sections.some(({ kind }) => kind === 'capacitance-table');
 	return [
 		{
 			name: 'datasheet.json',
@@ -24,43 +24,16 @@ export function attachedFiles(document: DatasheetDocument): EmbeddedFile[] {
 			bytes: canonicalBytes(document),
 			relationship: AFRelationship.Source
 		},
-		...(table === null
-			? []
-			: [
+		...(hasTable
+			? [
 					{
 						name: 'capacitance-table.csv',
 						holds: 'capacitance at each bias',
 						mimeType: 'text/csv',
-						bytes: new TextEncoder().encode(table),
+						bytes: new TextEncoder().encode(capacitanceTableCsv(document)),
 						relationship: AFRelationship.Data
 					}
-				])
+				]
+			: [])
 	];
-}
-
-/** One line a bias, digits as printed, units in the names; `null` without a capacitance table. */
-export function capacitanceCsv(document: DatasheetDocument): string | null {
-	const tables = document.sections.filter((section) => section.kind === 'capacitance-table');
-	if (tables.length === 0) return null;
-	const number = (printed: PrintedNumber | null) =>
-		printed === null ? '' : printed.text.replace('\u2212', '-');
-	return tables
-		.map(({ unit, temperatureCelsius, frequency, rows }) =>
-			[
-				`temperature_degC,frequency_Hz,V_R_V,C_tot_min_${unit},C_tot_typ_${unit},C_tot_max_${unit},basis`,
-				...rows.map((row) =>
-					[
-						temperatureCelsius,
-						frequency,
-						number(row.bias),
-						number(row.minimum),
-						number(row.typical),
-						number(row.maximum),
-						row.basis === null ? '' : BASIS_MARKS[row.basis]
-					].join(',')
-				)
-			].join('\r\n')
-		)
-		.join('\r\n\r\n')
-		.concat('\r\n');
 }

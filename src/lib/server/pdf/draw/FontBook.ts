@@ -1,6 +1,7 @@
 import { PDFHexString, PDFName, PDFString, type PDFContext, type PDFRef } from 'pdf-lib';
-import { FACES, fontOf, type Face } from '../fonts/faces';
+import { FACES, fontFile, fontOf, type Face } from '../fonts/faces';
 import { shapeText, type ShapedGlyph } from '../fonts/shapeText';
+import { subsetTrueType } from '../fonts/subsetTrueType';
 import { charactersNotInFaces } from '../../../core/messages/print';
 import { decimal } from './decimal';
 
@@ -19,7 +20,6 @@ interface Used {
 	/** Name of the font in page resources. */
 	readonly name: string;
 	readonly ref: PDFRef;
-	readonly subset: ReturnType<ReturnType<typeof fontOf>['createSubset']>;
 	/** Number in the subset, by the font's own glyph number. */
 	readonly numbers: Map<number, number>;
 	/** In the order of the subset's numbers, from 1. */
@@ -56,8 +56,8 @@ export class FontBook {
 	}
 
 	/** Writes every used face as a subset with widths and a way back to Unicode. */
-	async embed(): Promise<void> {
-		for (const [face, used] of this.#used) await this.#embedFace(face, used);
+	embed(): void {
+		for (const [face, used] of this.#used) this.#embedFace(face, used);
 	}
 
 	#open(face: Face): Used {
@@ -66,7 +66,6 @@ export class FontBook {
 		const opened: Used = {
 			name: `F${FACES.indexOf(face) + 1}`,
 			ref: this.#context.nextRef(),
-			subset: fontOf(face).createSubset(),
 			numbers: new Map(),
 			glyphs: []
 		};
@@ -74,13 +73,13 @@ export class FontBook {
 		return opened;
 	}
 
-	async #embedFace(face: Face, used: Used): Promise<void> {
+	#embedFace(face: Face, used: Used): void {
 		const context = this.#context;
 		const font = fontOf(face);
 		const scale = 1000 / font.unitsPerEm;
 		const { postscriptName } = font;
 		const name = PDFName.of(`${subsetTag(face)}+${postscriptName}`);
-		const bytes = await encodeSubset(used.subset);
+		const bytes = subsetTrueType(fontFile(face), [0, ...used.glyphs.map(({ id }) => id)]);
 		const file = context.register(context.flateStream(bytes, { Length1: bytes.length }));
 		const { minX, minY, maxX, maxY } = font.bbox;
 		const descriptor = context.register(
@@ -130,9 +129,8 @@ export class FontBook {
 function numberIn(used: Used, glyph: ShapedGlyph): number {
 	const known = used.numbers.get(glyph.id);
 	if (known !== undefined) return known;
-	const number = used.subset.includeGlyph(glyph.id);
+	const number = used.glyphs.push(glyph);
 	used.numbers.set(glyph.id, number);
-	used.glyphs[number - 1] = glyph;
 	return number;
 }
 
@@ -142,16 +140,6 @@ const subsetTag = (face: Face) => `PLATE${String.fromCharCode(65 + FACES.indexOf
 /** Serif 2, symbolic 4 (glyphs are numbered, not encoded), italic 64. */
 const flagsOf = (face: Face) =>
 	4 + (face.startsWith('slab') ? 2 : 0) + (face.endsWith('Italic') ? 64 : 0);
-
-function encodeSubset(subset: Used['subset']): Promise<Uint8Array> {
-	return new Promise((resolve) => {
-		const parts: Uint8Array[] = [];
-		subset
-			.encodeStream()
-			.on('data', (bytes) => parts.push(bytes))
-			.on('end', () => resolve(Uint8Array.from(Buffer.concat(parts))));
-	});
-}
 
 /** The CMap from glyph numbers to UTF-16 text, in blocks of at most 100 lines (ISO 32000-1, 9.10.3). */
 function unicodeMap(glyphs: readonly ShapedGlyph[]): string {

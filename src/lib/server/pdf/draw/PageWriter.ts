@@ -16,6 +16,8 @@ const INKS: Record<Ink, Colour> = {
 export interface MarkedContent {
 	readonly node: number;
 	readonly id: number;
+	/** A symbol: a part of the node with a reading of its own, `V_R`. */
+	readonly actual: string | null;
 }
 
 /** Turns boxes into the operators of one page. Places are given from above, PDF counts from below. */
@@ -32,16 +34,19 @@ export class PageWriter {
 
 	/** Writes boxes in order; neighbours of one tag share one stretch of marked content. */
 	write(boxes: readonly Box[], roleOf: (node: number) => string): void {
-		let open: Tag | undefined;
+		let open: string | null = null;
 		for (const box of boxes) {
-			if (box.tag !== open) {
-				if (open !== undefined) this.#add('EMC');
-				this.#add(box.tag === null ? '/Artifact BMC' : this.#begin(box.tag, roleOf(box.tag)));
-				open = box.tag;
+			const actual = box.kind === 'text' ? (box.actual ?? null) : null;
+			const stretch = `${box.tag} ${actual ?? ''}`;
+			// Two equal symbols side by side are two symbols.
+			if (stretch !== open || (actual !== null && box.tag !== null)) {
+				if (open !== null) this.#add('EMC');
+				this.#add(this.#begin(box.tag, box.tag === null ? null : actual, roleOf));
+				open = stretch;
 			}
 			this.#box(box);
 		}
-		if (open !== undefined) this.#add('EMC');
+		if (open !== null) this.#add('EMC');
 	}
 
 	get content(): string {
@@ -53,10 +58,13 @@ export class PageWriter {
 		return this.#marked;
 	}
 
-	#begin(node: number, role: string): string {
+	#begin(tag: Tag, actual: string | null, roleOf: (node: number) => string): string {
+		if (tag === null) return '/Artifact BMC';
 		const id = this.#marked.length;
-		this.#marked.push({ node, id });
-		return `/${role} <</MCID ${id}>> BDC`;
+		this.#marked.push({ node: tag, id, actual });
+		return actual === null
+			? `/${roleOf(tag)} <</MCID ${id}>> BDC`
+			: `/Span <</MCID ${id} /ActualText ${PDFHexString.fromText(actual).toString()}>> BDC`;
 	}
 
 	#add(...operators: string[]) {
@@ -105,14 +113,7 @@ export class PageWriter {
 			);
 			along += piece.width + (piece.after ?? 0);
 		}
-		lines.push('ET');
-		if (box.actual === undefined) this.#add(...lines);
-		else
-			this.#add(
-				`/Span <</ActualText ${PDFHexString.fromText(box.actual).toString()}>> BDC`,
-				...lines,
-				'EMC'
-			);
+		this.#add(...lines, 'ET');
 	}
 
 	#rule(box: RuleBox): void {

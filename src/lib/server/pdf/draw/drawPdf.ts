@@ -29,7 +29,7 @@ export async function drawPdf(
 		page.node.set(PDFName.of('Tabs'), PDFName.of('S'));
 		return { ref: page.ref, marked: writer.marked };
 	});
-	await fonts.embed();
+	fonts.embed();
 	const resources = context.register(context.obj({ Font: fonts.resources() }));
 	pdf.getPages().forEach((page) => page.node.set(PDFName.of('Resources'), resources));
 

@@ -18,9 +18,21 @@ export interface TaggedPage {
 /** Cells may be empty; anything else without content is left out of the tree. */
 const MAY_BE_EMPTY = new Set(['TR', 'TH', 'TD']);
 
+/** Where something first appears: page after page, stretch after stretch. */
+type Position = number;
+const PAGE_STEP = 1e6;
+
+interface Stretch {
+	readonly page: PDFRef;
+	readonly id: number;
+	readonly actual: string | null;
+	readonly position: Position;
+}
+
 /**
  * Writes the tag tree, the way back from marked content to it, and returns the tree's root for the
- * catalogue (ISO 32000-1, 14.7).
+ * catalogue (ISO 32000-1, 14.7). What belongs to a node stands in the order of its appearance; a
+ * symbol within it becomes a span that reads as `V_R`.
  */
 export function writeTags(
 	context: PDFContext,
@@ -30,8 +42,11 @@ export function writeTags(
 	const content = contentByNode(pages);
 	const children = childrenByNode(nodes);
 	const kept = keptNodes(nodes, children, content);
+	const positions = firstPositions(nodes, content);
 	const refs = nodes.map((_, at) => (kept.has(at) ? context.nextRef() : null));
 	const root = context.nextRef();
+	/** The element of each stretch: its node's, or its own span. */
+	const owners = new Map<Position, PDFRef>();
 
 	nodes.forEach((node, at) => {
 		const ref = refs[at];
@@ -39,22 +54,26 @@ export function writeTags(
 		const parent = node.parent === null ? root : refs[node.parent];
 		const own = content.get(at) ?? [];
 		const page = own[0]?.page;
-		const kids: PDFObject[] = own.map((stretch) =>
-			stretch.page === page
-				? PDFNumber.of(stretch.id)
-				: context.obj({ Type: 'MCR', Pg: stretch.page, MCID: stretch.id })
-		);
+		const kids: { readonly position: Position; readonly kid: PDFObject }[] = own.map((stretch) => {
+			const owner = stretch.actual === null ? ref : symbolSpan(context, stretch, ref);
+			owners.set(stretch.position, owner);
+			return {
+				position: stretch.position,
+				kid: owner === ref ? reference(context, stretch, page) : owner
+			};
+		});
 		for (const child of children.get(at) ?? []) {
 			const kid = refs[child];
-			if (kid) kids.push(kid);
+			if (kid) kids.push({ position: positions.get(child) ?? 0, kid });
 		}
+		kids.sort((a, b) => a.position - b.position);
 		context.assign(
 			ref,
 			context.obj({
 				Type: 'StructElem',
 				S: node.role,
 				P: parent ?? root,
-				K: kids,
+				K: kids.map(({ kid }) => kid),
 				...(page && { Pg: page }),
 				...(node.role === 'Note' && { ID: PDFHexString.fromText(`note-${at}`) }),
 				...details(context, node)
@@ -65,7 +84,7 @@ export function writeTags(
 	const parents = context.obj({
 		Nums: pages.flatMap(({ marked }, at) => [
 			at,
-			context.obj(marked.map(({ node }) => refs[node] ?? root))
+			context.obj(marked.map(({ id }) => owners.get(at * PAGE_STEP + id) ?? root))
 		])
 	});
 	context.assign(
@@ -80,15 +99,57 @@ export function writeTags(
 	return root;
 }
 
-function contentByNode(pages: readonly TaggedPage[]) {
-	const content = new Map<number, { page: PDFRef; id: number }[]>();
-	for (const { ref, marked } of pages)
-		for (const { node, id } of marked) {
+/** A stretch as its element refers to it: by number on the element's page, else with the page. */
+const reference = (context: PDFContext, { page, id }: Stretch, own: PDFRef | undefined) =>
+	page === own ? PDFNumber.of(id) : context.obj({ Type: 'MCR', Pg: page, MCID: id });
+
+const symbolSpan = (context: PDFContext, stretch: Stretch, parent: PDFRef): PDFRef =>
+	context.register(
+		context.obj({
+			Type: 'StructElem',
+			S: 'Span',
+			P: parent,
+			Pg: stretch.page,
+			K: stretch.id,
+			ActualText: PDFHexString.fromText(stretch.actual ?? '')
+		})
+	);
+
+function contentByNode(pages: readonly TaggedPage[]): Map<number, Stretch[]> {
+	const content = new Map<number, Stretch[]>();
+	pages.forEach(({ ref, marked }, page) => {
+		for (const { node, id, actual } of marked) {
 			const own = content.get(node) ?? [];
-			own.push({ page: ref, id });
+			own.push({ page: ref, id, actual, position: page * PAGE_STEP + id });
 			content.set(node, own);
 		}
+	});
 	return content;
+}
+
+/** First appearance of each node with all below it; an empty cell follows the one before it. */
+function firstPositions(
+	nodes: readonly StructureNode[],
+	content: ReadonlyMap<number, readonly Stretch[]>
+): Map<number, Position> {
+	const positions = new Map<number, Position>();
+	// Children are always added after their parent: from the last to the first, each reports upwards.
+	for (let at = nodes.length - 1; at >= 0; at--) {
+		const own = content.get(at)?.[0]?.position ?? Infinity;
+		const first = Math.min(own, positions.get(at) ?? Infinity);
+		positions.set(at, first);
+		const parent = nodes[at]?.parent ?? null;
+		if (parent !== null && first < (positions.get(parent) ?? Infinity))
+			positions.set(parent, first);
+	}
+	const before = new Map<number | null, Position>();
+	nodes.forEach(({ parent }, at) => {
+		const own = positions.get(at) ?? Infinity;
+		const position = own === Infinity ? (before.get(parent) ?? 0) : own;
+		positions.set(at, position);
+		before.set(parent, position);
+	});
+	return positions;
 }
 
 function childrenByNode(nodes: readonly StructureNode[]) {
@@ -131,7 +192,6 @@ function details(context: PDFContext, node: StructureNode): Record<string, PDFOb
 	return {
 		...(table && { A: table }),
 		...(node.alternative !== undefined && { Alt: text(node.alternative) }),
-		...(node.actualText !== undefined && { ActualText: text(node.actualText) }),
-		...(node.title !== undefined && { T: text(node.title) })
+		...(node.actualText !== undefined && { ActualText: text(node.actualText) })
 	};
 }

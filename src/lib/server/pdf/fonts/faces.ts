@@ -24,13 +24,21 @@ export type Font = ReturnType<typeof fontkit.create>;
 // The packages are dependencies and stay outside every bundle: Node finds them from this file,
 // wherever the process was started.
 const { resolve } = createRequire(import.meta.url);
+const files = new Map<Face, Uint8Array>();
 const parsed = new Map<Face, Font>();
 
-/** The parsed font of a face; read and parsed once a process. */
-export function fontOf(face: Face): Font {
-	const known = parsed.get(face);
-	if (known) return known;
-	const font = fontkit.create(readFileSync(resolve(FILES[face])));
-	parsed.set(face, font);
-	return font;
+function remember<Value>(values: Map<Face, Value>, face: Face, make: () => Value): Value {
+	const known = values.get(face);
+	if (known !== undefined) return known;
+	const made = make();
+	values.set(face, made);
+	return made;
 }
+
+/** The TrueType file of a face; read once a process. */
+export const fontFile = (face: Face): Uint8Array =>
+	remember(files, face, () => readFileSync(resolve(FILES[face])));
+
+/** The parsed font of a face; parsed once a process. */
+export const fontOf = (face: Face): Font =>
+	remember(parsed, face, () => fontkit.create(fontFile(face)));

@@ -1,7 +1,7 @@
 import { versionText, type PublicationRecord } from '../../../core/datasheet/record';
 import type { DatasheetDocument } from '../../../core/datasheet/document';
 import { moveBoxes, type Box } from './box';
-import { GUTTER, MEASURE, THIRD, type Paper } from './paper';
+import { GUTTER, MEASURE, mm, THIRD, type Paper } from './paper';
 import { statusWords } from './statusWords';
 import { RULES, STYLES } from './styles';
 import { breakLines, lineBoxes, oneLine, textSpan, type TextStyle } from './typeset';
@@ -30,7 +30,8 @@ export function runningHead(
 	paper: Paper
 ): Box[] {
 	const words = statusWords(document.status, record);
-	const y = paper.headBaseline;
+	// A proof's bar reaches down to the head's usual place.
+	const y = paper.headBaseline + (record.kind === 'release' ? 0 : mm(0.8));
 	const right = `version ${words.version}\u00a0\u00a0\u00a0\u00a0\u00a0${words.date}`;
 	const rightWidth = widthOf(right, STYLES.running);
 	const wordWidth = widthOf(words.word, STYLES.runningStatus);

@@ -110,7 +110,7 @@ function cornerTicks(paper: Paper): Box[] {
 
 /** Explains the marks of a proof once, at the foot of its first page. */
 export function proofKey(): Box[] {
-	const y = 7.6;
+	const y = 11;
 	const stale = { text: 'stale', isDashed: false };
 	const unbound = { text: 'unbound', isDashed: true };
 	const boxes: Box[] = [];
@@ -127,7 +127,7 @@ export function proofKey(): Box[] {
 		boxes.push(...stateBoxes(label, x, y));
 		x += stateBoxWidth(label);
 	};
-	words('Proof marks: ', STYLES.footnoteBold);
+	words('Proof marks:\u00a0', STYLES.footnoteBold);
 	words('dotted underline, digits bound to a limit\u00a0\u00a0·\u00a0\u00a0');
 	box(stale);
 	words('\u00a0newer data has moved it\u00a0\u00a0·\u00a0\u00a0');
@@ -137,4 +137,4 @@ export function proofKey(): Box[] {
 }
 
 /** What the key needs at the foot of the first page. */
-export const PROOF_KEY_HEIGHT = 14;
+export const PROOF_KEY_HEIGHT = 15;

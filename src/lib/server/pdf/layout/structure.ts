@@ -28,7 +28,6 @@ export interface NodeDetails {
 	readonly alternative?: string;
 	/** Text that stands for content which has none. */
 	readonly actualText?: string;
-	readonly title?: string;
 }
 
 export interface StructureNode extends NodeDetails {

@@ -2,6 +2,7 @@ import { symbolText, type LetterSymbol } from '../../../core/characteristics/sym
 import type { RichText } from '../../../core/datasheet/document';
 import type { Face } from '../fonts/faces';
 import { measureText } from '../fonts/shapeText';
+import { bindUnits } from './bindUnits';
 import type { Box, Ink, Tag, TextPiece } from './box';
 
 /** How a stretch of text is set. */
@@ -47,7 +48,13 @@ const tracked = (style: TextStyle) =>
 	style.tracking === undefined ? {} : { tracking: style.tracking };
 
 export const textSpan = (text: string, style: TextStyle): Span => ({
-	pieces: [piece(text.normalize('NFC'), { face: style.face, size: style.size, ...tracked(style) })]
+	pieces: [
+		piece(bindUnits(text.normalize('NFC')), {
+			face: style.face,
+			size: style.size,
+			...tracked(style)
+		})
+	]
 });
 
 /** A letter symbol: italic quantity, upright subscript. A bare f or t keeps off what follows. */
@@ -120,7 +127,21 @@ export function breakLines(spans: readonly Span[], width: number): Line[] {
 			used += space + word.width;
 		}
 	}
-	return lines.map(joinWords);
+	return lines.map(joinWords).map((line, at) => (at < lines.length - 1 ? spaced(line) : line));
+}
+
+/** A line with a space after its last word, outside its width: text copies with words apart. */
+function spaced(line: Line): Line {
+	const last = line.spans.at(-1);
+	const [only, ...more] = last?.pieces ?? [];
+	if (!last || !only) return line;
+	const trailing =
+		more.length === 0 && last.actual === undefined && last.isBound === undefined
+			? { ...last, pieces: [repiece(only, `${only.text} `)] }
+			: null;
+	if (trailing) return { ...line, spans: [...line.spans.slice(0, -1), trailing] };
+	const space = { pieces: [repiece({ ...only, rise: 0 }, ' ')], x: line.width, width: 0 };
+	return { ...line, spans: [...line.spans, space] };
 }
 
 /** One line, however wide. */

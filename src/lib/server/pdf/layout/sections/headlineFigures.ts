@@ -1,8 +1,8 @@
-import { BASIS_MARKS } from '../../../../core/limits/basis';
+import { BASIS_MARKS, type Basis } from '../../../../core/limits/basis';
 import type { Box } from '../box';
 import type { Block } from '../flow';
 import { GUTTER, QUARTER } from '../paper';
-import { stateLabel, type SectionOf, type Sheet } from '../sheet';
+import { stateLabel, STATUS_MARKS, type SectionOf, type Sheet } from '../sheet';
 import { RULES, STYLES } from '../styles';
 import { stateBoxes } from '../table';
 import {
@@ -26,7 +26,7 @@ function figureSpans(figure: string, unit: string): Span[] {
 		const style = isNumber ? STYLES.figure : STYLES.figureWord;
 		return at === 0
 			? [textSpan(token, style)]
-			: [textSpan(' ', STYLES.figureWord), textSpan(token, style)];
+			: [textSpan(' ', STYLES.figure), textSpan(token, style)];
 	});
 }
 
@@ -39,15 +39,7 @@ export function headlineFigures(section: SectionOf<'headline-figures'>, sheet: S
 		const line = oneLine(figureSpans(figure.figure, figure.unit));
 		const state = stateLabel(sheet, sheet.states.get(figure.slot));
 		const label = breakLines(
-			[
-				...richSpans(figure.label, STYLES.figureLabel),
-				...(figure.basis === null || figure.basis === 'typical'
-					? []
-					: [
-							textSpan(', ', STYLES.figureLabel),
-							textSpan(BASIS_MARKS[figure.basis], { ...STYLES.footnoteMark, size: 8 })
-						])
-			],
+			[...richSpans(figure.label, STYLES.figureLabel), ...standing(figure.basis, sheet)],
 			QUARTER
 		);
 		height = Math.max(
@@ -63,10 +55,22 @@ export function headlineFigures(section: SectionOf<'headline-figures'>, sheet: S
 				: stateBoxes(state, x + line.width + (line.width > 0 ? 6 : 0), BASELINE)),
 			...paragraphBoxes(
 				label,
-				{ tag: paragraph, x, y: BASELINE + TO_LABEL },
+				{ tag: structure.add('P', structure.root), x, y: BASELINE + TO_LABEL },
 				STYLES.figureLabel.leading
 			)
 		];
 	});
 	return { height, boxes };
+}
+
+/** What stands behind a headline figure: its basis mark, or that a limit is only provisional. */
+function standing(basis: Basis | null, sheet: Sheet): Span[] {
+	const status = STATUS_MARKS[sheet.document.status];
+	if (basis === 'typical' && !status?.marksTypical) return [];
+	if (status) return [textSpan(`, ${status.word}`, STYLES.figureLabel)];
+	if (basis === null || basis === 'typical') return [];
+	return [
+		textSpan(', ', STYLES.figureLabel),
+		textSpan(BASIS_MARKS[basis], { ...STYLES.footnoteMark, size: STYLES.figureLabel.size })
+	];
 }

@@ -83,7 +83,7 @@ function partNumber(text: string) {
 function statusBlock(sheet: Sheet): { boxes: Box[]; end: number } {
 	const { structure, record } = sheet;
 	const words = statusWords(sheet.document.status, record);
-	const table = structure.add('Table', structure.root, { title: 'Status' });
+	const table = structure.add('Table', structure.root);
 	const isRelease = record.kind === 'release';
 	const rows: [string, string][] = [
 		['Version', words.version],

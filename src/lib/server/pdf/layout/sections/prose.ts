@@ -60,17 +60,20 @@ function asideBoxes(attached: readonly AttachedFile[], sheet: Sheet, first: numb
 	if (attached.length === 0) return { boxes: [], end: 0 };
 	const { structure } = sheet;
 	const { leading } = STYLES.aside;
-	const tag = structure.add('P', structure.root);
-	const lines = [
-		oneLine([textSpan('Attached to this file', STYLES.asideHead)]),
-		...attached.flatMap(({ name, holds }) =>
+	const paragraphs = [
+		[oneLine([textSpan('Attached to this file', STYLES.asideHead)])],
+		...attached.map(({ name, holds }) =>
 			breakLines([textSpan(`${name}: ${holds}`, STYLES.aside)], THIRD)
 		)
 	];
-	return {
-		boxes: paragraphBoxes(lines, { tag, x: ASIDE_X, y: first }, leading),
-		end: first + (lines.length - 1) * leading + 3
-	};
+	let y = first;
+	const boxes = paragraphs.flatMap((lines) => {
+		const tag = structure.add('P', structure.root);
+		const placed = paragraphBoxes(lines, { tag, x: ASIDE_X, y }, leading);
+		y += lines.length * leading;
+		return placed;
+	});
+	return { boxes, end: y - leading + 3 };
 }
 
 /** Up to three lists side by side, each with its own rule and head. */
