@@ -1,12 +1,12 @@
-import { and, desc, eq, ne } from 'drizzle-orm';
+import { desc, eq } from 'drizzle-orm';
 import { readDocument } from '$lib/core/datasheet/readDocument';
 import { versionText } from '$lib/core/datasheet/record';
 import type { Database } from './database';
 import { release, revision } from './schema';
 
 /**
- * What the next release of a product is set against: the highest version that isn't withdrawn, with
- * its document; `undefined` before the first.
+ * What the next release of a product is set against: the highest version, with its document;
+ * `undefined` before the first. A withdrawn one counts: it is what readers had in their hands last.
  */
 export async function findPreviousRelease(db: Database, product: number) {
 	const [found] = await db
@@ -20,7 +20,7 @@ export async function findPreviousRelease(db: Database, product: number) {
 		})
 		.from(release)
 		.innerJoin(revision, eq(release.revision, revision.id))
-		.where(and(eq(release.product, product), ne(release.state, 'withdrawn')))
+		.where(eq(release.product, product))
 		.orderBy(desc(release.major), desc(release.minor))
 		.limit(1);
 	return found && { ...found, version: versionText(found), document: readDocument(found.document) };

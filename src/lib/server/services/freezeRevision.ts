@@ -3,7 +3,7 @@ import { canonicalBytes } from '$lib/core/datasheet/canonicalBytes';
 import type { Resolved } from '$lib/core/datasheet/resolveInput';
 import { nothingChangedSinceRelease, revisionAlreadyOpen } from '$lib/core/messages/review';
 import { sheetEvidence } from '$lib/core/review/sheetEvidence';
-import { sheetRows, type SheetRow, type StruckOutPlace } from '$lib/core/review/sheetRows';
+import { sheetRows, type StruckOutPlace } from '$lib/core/review/sheetRows';
 import { REVISION_STATE_WORDS } from '$lib/core/review/states';
 import type { VerificationEvidence } from '$lib/core/review/verificationEvidence';
 import { appendAudit } from '../db/appendAudit';

@@ -1,6 +1,6 @@
 import { error, fail, redirect } from '@sveltejs/kit';
 import { superValidate } from 'sveltekit-superforms';
-import { zod4 } from 'superforms-zod';
+import { zod as zod4 } from 'superforms-zod';
 import { compareDocuments } from '$lib/core/datasheet/compareDocuments';
 import { readDocument } from '$lib/core/datasheet/readDocument';
 import { versionText } from '$lib/core/datasheet/record';
@@ -39,7 +39,7 @@ async function comparison(
 }
 
 export const load: PageServerLoad = async ({ locals, params, url, depends }) => {
-	const person = requirePermission(locals, 'release.read');
+	const person = requirePermission(locals, 'product.read');
 	depends('platen:data');
 	const product = await findProductByPartNumber(locals.db, params.partNumber);
 	if (product === undefined) error(404, productNotFound(params.partNumber));

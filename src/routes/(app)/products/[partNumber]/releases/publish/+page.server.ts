@@ -1,6 +1,6 @@
 import { error, fail, redirect } from '@sveltejs/kit';
 import { superValidate } from 'sveltekit-superforms';
-import { zod4 } from 'superforms-zod';
+import { zod as zod4 } from 'superforms-zod';
 import { versionText } from '$lib/core/datasheet/record';
 import { productNotFound } from '$lib/core/messages/review';
 import { mayPublish } from '$lib/core/review/separation';

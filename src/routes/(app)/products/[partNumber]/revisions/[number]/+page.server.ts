@@ -1,6 +1,6 @@
 import { error, fail, redirect } from '@sveltejs/kit';
 import { superValidate } from 'sveltekit-superforms';
-import { zod4 } from 'superforms-zod';
+import { zod as zod4 } from 'superforms-zod';
 import { revisionNotFound } from '$lib/core/messages/review';
 import { mayDecide, mayPublish, mayVerify } from '$lib/core/review/separation';
 import { nextRevisionState } from '$lib/core/review/states';
