@@ -31,7 +31,7 @@ export function errorWords(status: number): ErrorWords {
 			next: 'Go back and correct it.'
 		};
 	return {
-		title: 'Something went wrong here',
+		title: 'This is our fault',
 		kept: 'What was saved before stands. What this request was about to save was not saved.',
 		next: 'Try again. If it happens again, tell an administrator the request below.'
 	};
