@@ -76,6 +76,17 @@ export const draftMessages = {
 	charactersMissing: (names: readonly string[]) =>
 		`The datasheet’s typefaces have no ${list(names)}. Write it another way.`,
 	changedMeanwhile: () => 'The draft was changed while you looked. Look again, then decide.',
+	formUnread: () => 'The form could not be read. Nothing was changed.',
+	settingsChanged: () => 'The settings are changed.',
+	everythingBound: (bound: number, left: number) =>
+		`${bound} ${bound === 1 ? 'place is' : 'places are'} bound, ${left} left open.`,
+	bound: () => 'Bound.',
+	keptAsPrinted: () => 'Kept as printed, with your reason.',
+	struckOut: () => 'Struck out, with your reason.',
+	cleared: () => 'Emptied.',
+	rated: () => 'The rating is set.',
+	written: () => 'The text is saved.',
+	notSubmitted: () => 'Not submitted. These are to be settled first:',
 	proofFailed: (why: string) => `The proof could not be drawn. ${why}`
 };
 

@@ -1,11 +1,11 @@
 import type { ResolveInput } from '$lib/core/datasheet/resolveInput';
+import { productClass } from '$lib/core/template/template';
 import type { Connection } from '../db/database';
 import { findDraft, type FoundDraft } from '../db/findDraft';
 import { findOrganization } from '../db/findOrganization';
-import { findProductByPartNumber } from '../db/findProductByPartNumber';
+import type { findProductByPartNumber } from '../db/findProductByPartNumber';
 import { listOrderingCodes } from '../db/listOrderingCodes';
 import { draftLimits } from './draftLimits';
-import { productClass } from '$lib/core/template/template';
 
 type FoundProduct = NonNullable<Awaited<ReturnType<typeof findProductByPartNumber>>>;
 
