@@ -4,27 +4,32 @@ import type { RequestHandler } from './$types';
 const HEARTBEAT_MILLISECONDS = 20_000;
 
 /** One stream a signed-in page: `change` after something was committed, here or elsewhere. */
-export const GET: RequestHandler = ({ locals, request }) => {
+export const GET: RequestHandler = ({ locals }) => {
 	requirePermission(locals, 'account.manage');
 	const { changes } = locals;
 	const encoder = new TextEncoder();
+	let stop = () => {};
 
 	const stream = new ReadableStream<Uint8Array>({
 		start(controller) {
 			const say = (text: string) => controller.enqueue(encoder.encode(text));
-			const stopListening = changes.listen(() => say('event: change\ndata: {}\n\n'), end);
+			say('retry: 2000\n\n');
 			const heartbeat = setInterval(() => say(': still here\n\n'), HEARTBEAT_MILLISECONDS);
-			let hasEnded = false;
-			function end() {
-				if (hasEnded) return;
-				hasEnded = true;
+			let stopListening = () => {};
+			stop = () => {
 				clearInterval(heartbeat);
 				stopListening();
-				controller.close();
-			}
-			request.signal.addEventListener('abort', end);
-			say('retry: 2000\n\n');
-		}
+			};
+			stopListening = changes.listen(
+				() => say('event: change\ndata: {}\n\n'),
+				() => {
+					stop();
+					controller.close();
+				}
+			);
+		},
+		// The reader went away: the stream is closed already.
+		cancel: () => stop()
 	});
 	return new Response(stream, {
 		headers: {
