@@ -79,8 +79,9 @@ export class FontBook {
 		const scale = 1000 / font.unitsPerEm;
 		const { postscriptName } = font;
 		const name = PDFName.of(`${subsetTag(face)}+${postscriptName}`);
-		const bytes = subsetTrueType(fontFile(face), [0, ...used.glyphs.map(({ id }) => id)]);
-		const file = context.register(context.flateStream(bytes, { Length1: bytes.length }));
+		const { file: fontBytes, length, unicode: unicodeBytes } = subsetOf(context, face, used.glyphs);
+		const packed = { Filter: 'FlateDecode' };
+		const file = context.register(context.stream(fontBytes, { ...packed, Length1: length }));
 		const { minX, minY, maxX, maxY } = font.bbox;
 		const descriptor = context.register(
 			context.obj({
@@ -111,7 +112,7 @@ export class FontBook {
 				W: [1, used.glyphs.map(({ advance }) => Number(decimal(advance)))]
 			})
 		);
-		const unicode = context.register(context.flateStream(unicodeMap(used.glyphs)));
+		const unicode = context.register(context.stream(unicodeBytes, packed));
 		context.assign(
 			used.ref,
 			context.obj({
@@ -140,6 +141,32 @@ const subsetTag = (face: Face) => `PLATE${String.fromCharCode(65 + FACES.indexOf
 /** Serif 2, symbolic 4 (glyphs are numbered, not encoded), italic 64. */
 const flagsOf = (face: Face) =>
 	4 + (face.startsWith('slab') ? 2 : 0) + (face.endsWith('Italic') ? 64 : 0);
+
+interface Subset {
+	/** Compressed font file, its length before, and its compressed way back to Unicode. */
+	readonly file: Uint8Array;
+	readonly length: number;
+	readonly unicode: Uint8Array;
+}
+
+/** Subsets written lately: the proofs of a draft ask for nearly the same glyphs again and again. */
+const subsets = new Map<string, Subset>();
+const KEPT = 64;
+
+function subsetOf(context: PDFContext, face: Face, glyphs: readonly ShapedGlyph[]): Subset {
+	const key = `${face} ${glyphs.map(({ id, text }) => `${id}${text}`).join(' ')}`;
+	const known = subsets.get(key);
+	if (known) return known;
+	const bytes = subsetTrueType(fontFile(face), [0, ...glyphs.map(({ id }) => id)]);
+	const made = {
+		file: context.flateStream(bytes).contents,
+		length: bytes.length,
+		unicode: context.flateStream(unicodeMap(glyphs)).contents
+	};
+	if (subsets.size >= KEPT) subsets.clear();
+	subsets.set(key, made);
+	return made;
+}
 
 /** The CMap from glyph numbers to UTF-16 text, in blocks of at most 100 lines (ISO 32000-1, 9.10.3). */
 function unicodeMap(glyphs: readonly ShapedGlyph[]): string {

@@ -1,4 +1,4 @@
-import { PDFDocument, PDFName, type PDFRef } from 'pdf-lib';
+import { PDFDocument, PDFName, PDFStreamWriter, type PDFRef } from 'pdf-lib';
 import type { DatasheetDocument } from '../../../core/datasheet/document';
 import type { PublicationRecord } from '../../../core/datasheet/record';
 import type { LaidOut } from '../layout/layoutDatasheet';
@@ -8,6 +8,9 @@ import { PageWriter } from './PageWriter';
 import { writeMetadata } from './writeMetadata';
 import { writeOutline } from './writeOutline';
 import { writeTags, type TaggedPage } from './writeTags';
+
+/** Many in one: compressing each stream anew costs more than its length. */
+const OBJECTS_IN_A_STREAM = 1000;
 
 /** Boxes → operators → one PDF file: pages, fonts, tag tree, bookmarks, metadata, attached files. */
 export async function drawPdf(
@@ -51,5 +54,11 @@ export async function drawPdf(
 			afRelationship: file.relationship
 		});
 
-	return pdf.save({ addDefaultPage: false, objectsPerTick: Infinity });
+	await pdf.flush();
+	return PDFStreamWriter.forContext(
+		context,
+		Infinity,
+		true,
+		OBJECTS_IN_A_STREAM
+	).serializeToBuffer();
 }

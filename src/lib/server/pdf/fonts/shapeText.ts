@@ -32,12 +32,22 @@ const CACHE_LIMIT = 20_000;
 export const plainSpaces = (text: string) => text.replaceAll(/[\u00a0\u202f\u2007\u2009]/g, ' ');
 
 /** Glyphs and kerning of a text in a face. Columns of numbers go without kerning, to stay columns. */
-export function shapeText(face: Face, text: string, kerning = true): ShapedRun {
-	const glyphs = plainSpaces(text)
-		.split(/( )/)
-		.filter((part) => part !== '')
-		.flatMap((part) => (part === ' ' ? space(face) : shapeWord(face, part, kerning).glyphs));
-	return { glyphs, width: widthOf(glyphs) };
+export const shapeText = (face: Face, text: string, kerning = true): ShapedRun =>
+	remember(`${face} ${kerning} run ${text}`, () => {
+		const glyphs = plainSpaces(text)
+			.split(/( )/)
+			.filter((part) => part !== '')
+			.flatMap((part) => (part === ' ' ? space(face) : shapeWord(face, part, kerning).glyphs));
+		return { glyphs, width: widthOf(glyphs) };
+	});
+
+function remember(key: string, shape: () => ShapedRun): ShapedRun {
+	const known = cache.get(key);
+	if (known) return known;
+	const shaped = shape();
+	if (cache.size >= CACHE_LIMIT) cache.clear();
+	cache.set(key, shaped);
+	return shaped;
 }
 
 /** Width of a text at a size, with kerning and `tracking` (in pt) after each glyph. */
@@ -63,22 +73,16 @@ function space(face: Face): ShapedGlyph {
 	return { ...glyph, adjustment: WORD_SPACE - glyph.advance };
 }
 
-function shapeWord(face: Face, word: string, kerning: boolean): ShapedRun {
-	const key = `${face} ${kerning} ${word}`;
-	const known = cache.get(key);
-	if (known) return known;
-
-	const font = fontOf(face);
-	const scale = 1000 / font.unitsPerEm;
-	const run = font.layout(word, kerning ? FEATURES : WITHOUT_KERNING);
-	const glyphs = run.glyphs.map((glyph, at) => ({
-		id: glyph.id,
-		text: String.fromCodePoint(...glyph.codePoints),
-		advance: glyph.advanceWidth * scale,
-		adjustment: ((run.positions[at]?.xAdvance ?? glyph.advanceWidth) - glyph.advanceWidth) * scale
-	}));
-	const shaped = { glyphs, width: widthOf(glyphs) };
-	if (cache.size >= CACHE_LIMIT) cache.clear();
-	cache.set(key, shaped);
-	return shaped;
-}
+const shapeWord = (face: Face, word: string, kerning: boolean): ShapedRun =>
+	remember(`${face} ${kerning} word ${word}`, () => {
+		const font = fontOf(face);
+		const scale = 1000 / font.unitsPerEm;
+		const run = font.layout(word, kerning ? FEATURES : WITHOUT_KERNING);
+		const glyphs = run.glyphs.map((glyph, at) => ({
+			id: glyph.id,
+			text: String.fromCodePoint(...glyph.codePoints),
+			advance: glyph.advanceWidth * scale,
+			adjustment: ((run.positions[at]?.xAdvance ?? glyph.advanceWidth) - glyph.advanceWidth) * scale
+		}));
+		return { glyphs, width: widthOf(glyphs) };
+	});

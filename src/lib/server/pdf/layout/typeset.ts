@@ -212,7 +212,7 @@ function joinWords(words: readonly Word[]): Line {
 		const last = spans.at(-1);
 		const [left, right] = [last?.pieces[0], span.pieces[0]];
 		if (last && left && right && canJoin(last, span)) {
-			const joined = repiece(left, left.text + right.text);
+			const joined = joinPieces(left, right);
 			x += joined.width - last.width;
 			spans[spans.length - 1] = { ...last, pieces: [joined], width: joined.width };
 			return;
@@ -226,6 +226,14 @@ function joinWords(words: readonly Word[]): Line {
 		word.spans.forEach(push);
 	});
 	return { width: x, spans };
+}
+
+/** Beside a space nothing kerns: widths add up there. */
+function joinPieces(left: TextPiece, right: TextPiece): TextPiece {
+	const text = left.text + right.text;
+	return left.text.endsWith(' ') || right.text.startsWith(' ')
+		? { ...left, text, width: left.width + right.width }
+		: repiece(left, text);
 }
 
 function canJoin(left: Span, right: Span): boolean {
