@@ -107,5 +107,8 @@ export const ACCESS: Readonly<Record<string, Access>> = {
 	'/api/v1/releases GET': 'library',
 	'/api/v1/releases/[partNumber]/[version]/[file] GET': 'library',
 	'/api/v1/uploads/[upload=id] GET': 'measurement.read',
-	'/api/v1/uploads/[upload=id]/mapping POST': 'measurement.upload'
+	'/api/v1/uploads/[upload=id]/mapping POST': 'measurement.upload',
+
+	'/templates load': 'template.read',
+	'/templates/[key] load': 'template.read'
 };
