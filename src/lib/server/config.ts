@@ -5,7 +5,7 @@ import { z } from 'zod';
 
 const environment = z.object({
 	PORT: z.coerce.number('expected a number').int().min(0).max(65_535).default(3000),
-	HOST: z.string().min(1).default('127.0.0.1'),
+	HOST: z.string().min(1).default('0.0.0.0'),
 	ORIGIN: z
 		.url({ protocol: /^https?$/, error: 'expected an address like https://host' })
 		.optional(),
@@ -26,8 +26,11 @@ const environment = z.object({
 export interface Config {
 	readonly port: number;
 	readonly host: string;
-	/** Where people reach the server; cookie requests that change something come from here. */
-	readonly origin: string;
+	/**
+	 * Where people reach the server; cookie requests that change something come from here. Not
+	 * given, they come from the host they ask.
+	 */
+	readonly origin: string | undefined;
 	readonly dataDir: string;
 	readonly databaseUrl: string;
 	/** The folder published files and uploads lie in. */
@@ -61,7 +64,7 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
 	return {
 		port: PORT,
 		host: HOST,
-		origin: new URL(ORIGIN ?? `http://localhost:${PORT}`).origin,
+		origin: ORIGIN === undefined ? undefined : new URL(ORIGIN).origin,
 		dataDir,
 		databaseUrl: DATABASE_URL ?? pathToFileURL(join(dataDir, 'platen.db')).href,
 		storageFolder: usableFolder(

@@ -45,6 +45,19 @@ export const measurementMessages = {
 	biasSignMissing: () => 'Say which sign the file gives a reverse bias.',
 	columnUnknown: (header: string) => `The file has no column “${header}”.`,
 	mappingIncomplete: (messages: readonly string[]) => messages.join(' '),
+	waferLotLines: () => 'Write one lot a line, as “lot = wafer lot”.',
+	setupNumber: (
+		field:
+			'signalLevelMillivolts' | 'frequencyMegahertz' | 'temperatureCelsius' | 'uncertaintyPercent'
+	) =>
+		({
+			signalLevelMillivolts: 'The signal level is a number above 0, in mV.',
+			frequencyMegahertz: 'The frequency is a number above 0, in MHz.',
+			temperatureCelsius: 'The temperature is a number in °C, not below absolute zero.',
+			uncertaintyPercent: 'The uncertainty is a number from 0 to below 100, in %.'
+		})[field],
+	formFileLimit: (limit: number) => `Without JavaScript a file may have at most ${limit / 1e6} MB.`,
+	chooseFile: () => 'Choose a file first.',
 	waferLotDiffers: (lot: string, stored: string, stated: string) =>
 		`Lot ${lot} is known to come from wafer lot ${stored}; this upload says ${stated}.`,
 	waferLotTwice: (lot: string, first: string, second: string) =>
