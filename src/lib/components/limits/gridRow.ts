@@ -17,6 +17,12 @@ export interface GridRow {
 	readonly warnings: readonly string[];
 }
 
+/** The same with the spread that the stored sums show, relative, in %. */
+export interface CurveGridRow extends GridRow {
+	readonly betweenPercent: number | null;
+	readonly withinPercent: number | null;
+}
+
 export function gridRow(row: LimitRow): GridRow {
 	return {
 		key: row.conditionKey,
