@@ -1,6 +1,6 @@
 import type { Asking } from '$lib/server/auth/requirePermission';
-import type { Attempts } from '$lib/server/auth/attempts';
 import type { Sessions } from '$lib/server/auth/sessions';
+import type { SignInAttempts } from '$lib/server/auth/signInAttempts';
 import type { Changes } from '$lib/server/work/changes';
 import type { AuditHead } from '$lib/server/db/verifyAuditChain';
 import type { Connection } from '$lib/server/db/database';
@@ -17,8 +17,7 @@ declare global {
 			db: Connection;
 			storage: Storage;
 			sessions: Sessions;
-			/** Failed sign-ins, by address and by email. */
-			signInAttempts: Attempts;
+			signInAttempts: SignInAttempts;
 			changes: Changes;
 			/** The largest measurement file that is taken, in bytes. */
 			uploadLimit: number;

@@ -1,6 +1,9 @@
 import { randomUUID } from 'node:crypto';
+import { STATUS_CODES } from 'node:http';
+import { isHttpError, isRedirect } from '@sveltejs/kit';
 import type { Handle, HandleServerError, ServerInit } from '@sveltejs/kit';
 import { sequence } from '@sveltejs/kit/hooks';
+import { dev } from '$app/environment';
 import {
 	badToken,
 	bodyLengthNeeded,
@@ -10,15 +13,21 @@ import {
 	tooManyAttempts,
 	wrongOrigin
 } from '$lib/core/messages';
-import { application, closeApplication, openApplication } from '$lib/server/application';
+import { application, closeApplication, openApplication, stopWork } from '$lib/server/application';
 import { readAuditHead } from '$lib/server/auditHead';
 import { personOfSession } from '$lib/server/auth/personOfSession';
 import { personOfToken } from '$lib/server/auth/personOfToken';
 import { bodyLimit } from '$lib/server/auth/bodyLimit';
+import { isOwnOrigin } from '$lib/server/auth/ownOrigin';
 import { problem } from '$lib/server/problem';
 
 export const init: ServerInit = async () => {
 	await openApplication(process.env);
+	if (dev) return;
+
+	// The server waits for its open requests before it says `shutdown`, and event streams never end
+	// by themselves.
+	for (const signal of ['SIGTERM', 'SIGINT']) process.once(signal, () => void stopWork());
 	process.once('sveltekit:shutdown', () => void closeApplication());
 };
 
@@ -71,7 +80,7 @@ const person: Handle = async ({ event, resolve }) => {
 		const found = await personOfToken(event.locals.db, authorization);
 		if (found === undefined) {
 			await tokenAttempts.spend(address);
-			return problem(401, badToken(), {});
+			return problem(401, badToken());
 		}
 		event.locals.person = found;
 		return resolve(event);
@@ -80,7 +89,8 @@ const person: Handle = async ({ event, resolve }) => {
 	// A cookie goes along by itself, wherever a request was made up: so it must come from here.
 	if (CHANGES.has(event.request.method)) {
 		const { origin } = application().config;
-		if (event.request.headers.get('origin') !== origin) {
+		const { headers: said } = event.request;
+		if (!isOwnOrigin(said.get('origin'), { origin, host: said.get('host') })) {
 			return event.locals.isApi
 				? problem(403, wrongOrigin())
 				: new Response(wrongOrigin(), { status: 403 });
@@ -113,30 +123,58 @@ const headers: Handle = async ({ event, resolve }) => {
 	return response;
 };
 
+/** Headers that go with a refusal, whatever its body. */
+const KEPT = ['allow', 'retry-after'];
+
 /** The API answers with problem details, whatever refused. */
 const problems: Handle = async ({ event, resolve }) => {
-	const response = await resolve(event);
-	const isRefusal = response.status >= 400 && event.locals.isApi;
+	if (!event.locals.isApi) return resolve(event);
+	// The framework answers an error as JSON to who asks for it, and as a page to a browser.
+	event.request.headers.set('accept', 'application/json');
+
+	const response = await answered(() => resolve(event), event.locals);
+	if (response.status < 400) return response;
 	const type = response.headers.get('content-type') ?? '';
-	if (!isRefusal || type.startsWith('application/problem+json')) return response;
-	return problem(response.status, await detailOf(response, event.locals.requestId));
+	const refusal = type.startsWith('application/problem+json')
+		? response
+		: problem(response.status, await detailOf(response, event.locals.requestId));
+	for (const name of KEPT) {
+		const value = response.headers.get(name);
+		if (value !== null) refusal.headers.set(name, value);
+	}
+	// RFC 9110, 11.6.1: a 401 says how to sign in.
+	if (response.status === 401) refusal.headers.set('www-authenticate', 'Bearer');
+	return refusal;
 };
 
-async function detailOf(response: Response, requestId: string): Promise<string> {
-	if (response.status === 404 && !(response.headers.get('content-type') ?? '').includes('json')) {
-		return notFound();
-	}
-	const text = await response.text();
+/** What another handle throws never reaches the framework's own error page. */
+async function answered(
+	answer: () => Promise<Response> | Response,
+	{ log, requestId }: App.Locals
+): Promise<Response> {
 	try {
-		const said: unknown = JSON.parse(text);
-		if (typeof said === 'object' && said !== null && 'message' in said) return String(said.message);
-	} catch {
-		// Not JSON: the text is the framework's own.
+		return await answer();
+	} catch (thrown) {
+		if (isRedirect(thrown)) throw thrown;
+		if (isHttpError(thrown)) return problem(thrown.status, thrown.body.message);
+		log.error({ err: thrown });
+		return problem(500, ourFault(requestId));
 	}
-	return response.status >= 500 ? ourFault(requestId) : text.slice(0, 500);
 }
 
-export const handle = sequence(headers, request, bodies, problems, person);
+async function detailOf(response: Response, requestId: string): Promise<string> {
+	const type = response.headers.get('content-type') ?? '';
+	const text = await response.text();
+	if (type.includes('json')) {
+		const said: unknown = JSON.parse(text);
+		if (typeof said === 'object' && said !== null && 'message' in said) return String(said.message);
+	}
+	if (response.status === 404) return notFound();
+	if (response.status >= 500) return ourFault(requestId);
+	return type.startsWith('text/plain') ? text : (STATUS_CODES[response.status] ?? 'Refused');
+}
+
+export const handle = sequence(headers, request, problems, bodies, person);
 
 export const handleError: HandleServerError = ({ error, event, status, message }) => {
 	const { requestId } = event.locals;

@@ -1,6 +1,7 @@
+import { randomUUID } from 'node:crypto';
 import { readFile, rename, writeFile } from 'node:fs/promises';
 import { join } from 'node:path';
-import { desc } from 'drizzle-orm';
+import { and, desc, eq } from 'drizzle-orm';
 import { z } from 'zod';
 import type { Database } from './db/database';
 import { audit } from './db/schema';
@@ -15,7 +16,10 @@ export async function readAuditHead(dataDir: string): Promise<AuditHead | undefi
 	return text === undefined ? undefined : auditHead.parse(JSON.parse(text));
 }
 
-/** Keeps the newest audit row's number and hash outside the database. Never goes back. */
+/**
+ * Keeps the newest audit row's number and hash outside the database. Never goes back, and stays
+ * where it is once the row it knows is gone: newer rows must not cover up that one was taken away.
+ */
 export async function keepAuditHead(db: Database, dataDir: string): Promise<void> {
 	const [newest] = await db
 		.select({ seq: audit.seq, hash: audit.hash })
@@ -24,7 +28,17 @@ export async function keepAuditHead(db: Database, dataDir: string): Promise<void
 		.limit(1);
 	const known = await readAuditHead(dataDir);
 	if (newest === undefined || newest.seq <= (known?.seq ?? 0)) return;
-	const aside = `${pathIn(dataDir)}.${process.pid}`;
+	if (known !== undefined && !(await isThere(db, known))) return;
+	const aside = `${pathIn(dataDir)}.${randomUUID()}`;
 	await writeFile(aside, JSON.stringify(newest));
 	await rename(aside, pathIn(dataDir));
+}
+
+async function isThere(db: Database, { seq, hash }: AuditHead): Promise<boolean> {
+	const [found] = await db
+		.select({ seq: audit.seq })
+		.from(audit)
+		.where(and(eq(audit.seq, seq), eq(audit.hash, hash)))
+		.limit(1);
+	return found !== undefined;
 }

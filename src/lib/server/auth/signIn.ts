@@ -1,8 +1,8 @@
 import { eq } from 'drizzle-orm';
 import type { Connection } from '../db/database';
 import { person } from '../db/schema';
-import type { Attempts } from './attempts';
 import { isPassword } from './passwords';
+import type { SignInAttempts } from './signInAttempts';
 
 export type SignInOutcome =
 	| { readonly status: 'known'; readonly person: string }
@@ -21,20 +21,18 @@ export interface SignInInput {
  */
 export async function checkSignIn(
 	db: Connection,
-	attempts: Attempts,
+	{ byEmail, byAddress }: SignInAttempts,
 	{ email, password, address }: SignInInput
 ): Promise<SignInOutcome> {
 	const wanted = email.trim().toLowerCase();
-	const keys = [`email ${wanted}`, `address ${address}`];
-	if ((await Promise.all(keys.map((key) => attempts.isSpent(key)))).includes(true)) {
-		return { status: 'paused' };
-	}
+	// Spent before the password is looked at: a hundred guesses at once are a hundred guesses.
+	const isLeft = await Promise.all([byEmail.spend(wanted), byAddress.spend(address)]);
+	if (isLeft.includes(false)) return { status: 'paused' };
+
 	const [found] = await db.select().from(person).where(eq(person.email, wanted)).limit(1);
-	const matches = await isPassword(found?.passwordHash, password);
-	if (!matches || !found?.isActive) {
-		await Promise.all(keys.map((key) => attempts.spend(key)));
-		return { status: 'refused' };
-	}
-	await attempts.forgive(`email ${wanted}`);
+	const isRight = await isPassword(found?.passwordHash, password);
+	if (!isRight || !found?.isActive) return { status: 'refused' };
+
+	await Promise.all([byEmail.forgive(wanted), byAddress.giveBack(address)]);
 	return { status: 'known', person: found.id };
 }

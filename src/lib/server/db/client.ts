@@ -12,7 +12,7 @@ const LOCK_TIMEOUT_MILLISECONDS = 15;
 
 export interface OpenDatabase {
 	readonly db: Connection;
-	close(): void;
+	readonly close: () => void;
 }
 
 /**

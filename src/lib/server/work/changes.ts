@@ -23,9 +23,11 @@ export function watchChanges(db: Connection): Changes {
 	>();
 	let seen: string | undefined;
 	let timer: NodeJS.Timeout | undefined;
+	let isStopped = false;
 
 	async function look(): Promise<void> {
 		const now = await stateOf(db).catch(() => seen);
+		if (isStopped) return;
 		if (seen !== undefined && now !== seen)
 			for (const { onChange } of listeners.values()) onChange();
 		seen = now;
@@ -34,12 +36,17 @@ export function watchChanges(db: Connection): Changes {
 
 	return {
 		listen(onChange, onEnd) {
+			if (isStopped) {
+				onEnd();
+				return () => undefined;
+			}
 			const key = {};
 			listeners.set(key, { onChange, onEnd });
 			timer ??= setTimeout(() => void look(), 0);
 			return () => listeners.delete(key);
 		},
 		stop() {
+			isStopped = true;
 			clearTimeout(timer);
 			for (const { onEnd } of [...listeners.values()]) onEnd();
 			listeners.clear();

@@ -39,21 +39,22 @@ export async function claimJob(db: Connection): Promise<ClaimedJob | undefined> 
 
 	return write(db, async (tx) => {
 		const now = Date.now();
-		const found = await findClaimable(tx, new Date(now).toISOString());
-		if (found === undefined) return undefined;
-		if (found.attempt >= MOST_ATTEMPTS) {
+		for (;;) {
+			const found = await findClaimable(tx, new Date(now).toISOString());
+			if (found === undefined) return undefined;
+
+			const attempt = found.attempt + 1;
+			const isOver = attempt > MOST_ATTEMPTS;
 			await tx
 				.update(job)
-				.set({ state: 'failed', error: jobGaveUp(MOST_ATTEMPTS), endedAt: instant() })
+				.set(
+					isOver
+						? { state: 'failed', error: jobGaveUp(MOST_ATTEMPTS), endedAt: instant() }
+						: { state: 'running', attempt, leaseUntil: leaseFrom(now) }
+				)
 				.where(eq(job.id, found.id));
-			return undefined;
+			if (!isOver) return { ...found, attempt };
 		}
-		const attempt = found.attempt + 1;
-		await tx
-			.update(job)
-			.set({ state: 'running', attempt, leaseUntil: leaseFrom(now) })
-			.where(eq(job.id, found.id));
-		return { ...found, attempt };
 	});
 }
 
@@ -93,6 +94,17 @@ export const finishJob = (db: Connection, held: Held, result: unknown) =>
 export const failJob = (db: Connection, held: Held, error: string) =>
 	change(db, held, { state: 'failed', error, leaseUntil: null, endedAt: instant() });
 
-/** Puts the job back: its process ends, or its thread died. The attempt has been counted. */
-export const releaseJob = (db: Connection, held: Held) =>
-	change(db, held, { state: 'queued', leaseUntil: null });
+/**
+ * Puts the job back into the queue. The attempt counts after its thread died; it does not when the
+ * process ended in order, and its number is free again, since nothing runs under it any more.
+ */
+export const releaseJob = (
+	db: Connection,
+	held: Held,
+	{ isCounted }: { readonly isCounted: boolean }
+) =>
+	change(db, held, {
+		state: 'queued',
+		leaseUntil: null,
+		...(isCounted ? {} : { attempt: held.attempt - 1 })
+	});

@@ -1,4 +1,3 @@
-import { Worker } from 'node:worker_threads';
 import { jobFailed } from '$lib/core/messages';
 import type { Connection } from '../db/database';
 import type { Log } from '../logging';
@@ -11,53 +10,65 @@ import {
 	releaseJob
 } from './claim';
 import type { ClaimedJob } from './claim';
-import type { FromThread, ThreadSetup } from './threadMessages';
+import type { JobPlace } from './jobPlace';
 
 const LOOK_EVERY_MILLISECONDS = 250;
 const HEARTBEAT_MILLISECONDS = LEASE_MILLISECONDS / 3;
 
 export interface Runner {
-	/** Stops claiming, puts a running job back into the queue and ends the thread. */
+	/** Stops claiming, breaks a running job off and puts it back into the queue. */
 	stop(): Promise<void>;
 }
 
 export interface RunnerSetup {
 	readonly db: Connection;
 	readonly log: Log;
-	/** The built worker. */
-	readonly entry: string;
-	readonly thread: ThreadSetup;
+	/** Where the work is done. */
+	readonly place: JobPlace;
 }
 
 /**
- * Claims jobs in the main thread and has them run in a worker thread, one at a time. The main
- * thread keeps the lease, since the worker is busy; a thread that dies gives its job back.
+ * Claims jobs and has them done elsewhere, one at a time. The lease is kept here, since the place
+ * is busy; a job whose place died goes back into the queue, and the attempt counts.
  */
-export function startRunner({ db, log, entry, thread }: RunnerSetup): Runner {
-	let worker: Worker | undefined;
-	let running: ClaimedJob | undefined;
+export function startRunner({ db, log, place }: RunnerSetup): Runner {
 	let isStopped = false;
-	let timer: NodeJS.Timeout | undefined;
+	let wake = () => {};
 
-	const openThread = (): Worker => {
-		const opened = new Worker(entry, { workerData: thread });
-		opened.on('error', (problem) => log.error({ err: problem }, 'the worker thread died'));
-		opened.on('exit', () => {
-			if (worker === opened) worker = undefined;
+	const pause = () =>
+		new Promise<void>((next) => {
+			const timer = setTimeout(next, LOOK_EVERY_MILLISECONDS);
+			wake = () => {
+				clearTimeout(timer);
+				next();
+			};
 		});
-		return opened;
-	};
+	const complain = (problem: unknown) => log.error({ err: problem }, jobFailed());
 
-	async function runInThread(job: ClaimedJob): Promise<void> {
-		const held = (worker ??= openThread());
+	async function workQueue(): Promise<void> {
+		while (!isStopped) {
+			const job = await claimJob(db).catch(complain);
+			if (job === undefined) await pause();
+			else await carryOut(job).catch(complain);
+		}
+	}
+
+	async function carryOut(job: ClaimedJob): Promise<void> {
+		if (isStopped) {
+			await releaseJob(db, job, { isCounted: false });
+			return;
+		}
+		log.info({ job: job.id, kind: job.kind, attempt: job.attempt }, 'job taken');
 		const heartbeat = setInterval(() => {
-			void prolongLease(db, job).then((isOurs) => {
-				if (!isOurs) void held.terminate();
-			});
+			prolongLease(db, job)
+				.then((isOurs) => (isOurs ? undefined : place.breakOff()))
+				.catch(complain);
 		}, HEARTBEAT_MILLISECONDS);
 		try {
-			const end = await answerOf(held, job, (progress) => void prolongLease(db, job, progress));
-			if (end === undefined) await releaseJob(db, job);
+			const end = await place.run(job, (progress) => {
+				prolongLease(db, job, progress).catch(complain);
+			});
+			if (end === undefined) await releaseJob(db, job, { isCounted: !isStopped });
 			else if (end.status === 'done') await finishJob(db, job, end.result);
 			else {
 				if (end.fault !== undefined) log.error({ job: job.id, kind: job.kind, fault: end.fault });
@@ -68,57 +79,14 @@ export function startRunner({ db, log, entry, thread }: RunnerSetup): Runner {
 		}
 	}
 
-	async function look(): Promise<void> {
-		try {
-			for (
-				let job = await claimJob(db);
-				job !== undefined && !isStopped;
-				job = await claimJob(db)
-			) {
-				running = job;
-				log.info({ job: job.id, kind: job.kind, attempt: job.attempt }, 'job taken');
-				await runInThread(job);
-				running = undefined;
-			}
-		} catch (problem) {
-			log.error({ err: problem }, jobFailed());
-			running = undefined;
-		}
-		if (!isStopped) timer = setTimeout(() => void look(), LOOK_EVERY_MILLISECONDS);
-	}
-
-	void look();
+	const working = workQueue();
 
 	return {
 		async stop() {
 			isStopped = true;
-			clearTimeout(timer);
-			const interrupted = running;
-			await worker?.terminate();
-			if (interrupted !== undefined) await releaseJob(db, interrupted);
+			wake();
+			await place.breakOff();
+			await working;
 		}
 	};
-}
-
-/** Hands a job to the thread and waits for its end; `undefined` when the thread died over it. */
-function answerOf(
-	worker: Worker,
-	job: ClaimedJob,
-	onProgress: (progress: Extract<FromThread, { kind: 'progress' }>['progress']) => void
-) {
-	return new Promise<Extract<FromThread, { kind: 'end' }>['end'] | undefined>((answer) => {
-		const hear = (message: FromThread) => {
-			if (message.kind === 'progress') onProgress(message.progress);
-			if (message.kind === 'end') done(message.end);
-		};
-		const die = () => done(undefined);
-		const done = (end: Extract<FromThread, { kind: 'end' }>['end'] | undefined) => {
-			worker.off('message', hear);
-			worker.off('exit', die);
-			answer(end);
-		};
-		worker.on('message', hear);
-		worker.on('exit', die);
-		worker.postMessage(job);
-	});
 }
