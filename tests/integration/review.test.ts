@@ -131,9 +131,9 @@ describe('evidence by the second route', () => {
 			const { checks, devices, independentLots, outside, lots } = done(evidence.computed);
 			expect([devices, independentLots, lots.length]).toEqual([300, 3, 3]);
 			for (const check of Object.values(checks)) expect(check?.agrees).toBe(true);
-			// Content 0.99 leaves 3 of 300. SciPy: k = nct.ppf(0.975, 299, norm.ppf(0.99)*sqrt(300))
-			// / sqrt(300) and 300*norm.cdf(-k) = 1.56447
-			expect(outside.minimum?.allowed).toBe(3);
+			// SciPy: k = nct.ppf(0.975, 299, norm.ppf(0.99)*sqrt(300))/sqrt(300), 300*norm.cdf(-k)
+			// = 1.56447; R: qbinom(0.95, 300, 0.005214883615) = 4
+			expect(outside.minimum?.allowed).toBe(4);
 			expect(outside.minimum?.expected).toBeCloseTo(1.5644650844, 8);
 			expect(evidence.risk).toBe('low');
 		}

@@ -36,17 +36,18 @@ export interface StruckOutPlace {
 const NOTHING = { minimum: null, typical: null, maximum: null };
 const CHARACTERISTICS = 'Characteristics';
 
-/** Every row of the verification sheet in the order of the datasheet, then struck out, then text. */
+/** What is measured first, then what people typed: the capacitance tables lead. */
+const ORDER = ['capacitance', 'characteristic', 'rating'] as const;
+
+/** Every row of the verification sheet: the document's, then what is struck out, then texts. */
 export function sheetRows(
 	document: DatasheetDocument,
 	struckOut: readonly StruckOutPlace[]
 ): SheetRow[] {
 	return [
-		...documentRows(document).map((entry) => ({
-			row: entry.row.id,
-			statement: statementOf(entry),
-			entry
-		})),
+		...documentRows(document)
+			.toSorted((a, b) => ORDER.indexOf(a.kind) - ORDER.indexOf(b.kind))
+			.map((entry) => ({ row: entry.row.id, statement: statementOf(entry), entry })),
 		...struckOut.map((place) => ({
 			row: place.id,
 			statement: struckOutStatement(place),

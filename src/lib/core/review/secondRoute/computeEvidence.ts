@@ -67,8 +67,11 @@ export function computeEvidence(input: EvidenceInput): ComputedEvidence {
 		minimum: printed.minimum?.value ?? null,
 		maximum: printed.maximum?.value ?? null
 	};
-	const allowed = allowedOutside(printed.basis ?? weakest, devices.length, rules.content);
 	const share = again.limits.shareOutside;
+	const allowed = allowedOutside(printed.basis ?? weakest, devices.length, {
+		share,
+		confidence: rules.confidence
+	});
 	const outside = (side: 'minimum' | 'maximum') =>
 		countOutside(devices, side, limits, { allowed, share });
 	return {

@@ -10,16 +10,16 @@ const device = (lot: string, value: number, name = '1') => ({
 });
 
 describe('how many devices a basis allows beyond one limit', () => {
+	// R: qbinom(0.95, n, share), with the share that a limit of that kind leaves outside
 	it.each([
-		['tested', 300, 0.95, 0],
-		['characterized', 300, 0.95, 15],
-		['characterized', 417, 0.95, 20],
-		['characterized', 300, 0.99, 3],
-		['sample-tested', 100, 0.99, 1],
-		['correlation', 99, 0.99, 0],
-		['typical', 300, 0.95, null]
-	] as const)('%s, %i devices, content %f', (basis, devices, content, allowed) => {
-		expect(allowedOutside(basis, devices, content)).toBe(allowed);
+		['tested', 300, 0.03595859787, 0],
+		['characterized', 300, 0.03595859787, 16],
+		['characterized', 300, 0.005214883615, 4],
+		['sample-tested', 417, 0.03586861601, 21],
+		['correlation', 33_000, 0.009456022249, 341],
+		['typical', 300, 0.03595859787, null]
+	] as const)('%s, %i devices, a share of %f', (basis, devices, share, allowed) => {
+		expect(allowedOutside(basis, devices, { share, confidence: 0.95 })).toBe(allowed);
 	});
 
 	// limits.md §6: at P = 0.95, γ = 0.95, n = 300 about eleven are expected.

@@ -1,5 +1,6 @@
 import type { DeviceOutside, LotRange, OutsideCount } from '../verificationEvidence';
 import type { Basis } from '../../limits/basis';
+import { binomialQuantile } from './binomialQuantile';
 import type { DeviceValue } from './readColumn';
 
 /** A file's 12.50 pF read into farad isn't the binary 12.50e-12 of the limit: noise of the arithmetic. */
@@ -13,19 +14,31 @@ export interface PrintedLimits {
 	readonly maximum: number | null;
 }
 
+/** What a limit promises, as far as the number of devices beyond it goes. */
+export interface OutsidePromise {
+	/** Share of normal values that a limit of this content and confidence leaves outside. */
+	readonly share: number;
+	/** γ */
+	readonly confidence: number;
+}
+
 /**
- * How many devices the basis allows beyond one limit: none behind *tested on every device*, else
- * the share 1 − P of the sample that the promise leaves open (limits.md §6). `null` for a typical
- * value, which promises nothing.
+ * How many devices the basis allows beyond one limit. None behind *tested on every device*; else as
+ * many as a sample with that share outside stays within with probability γ: the γ quantile of the
+ * binomial distribution (limits.md §6). `null` for a typical value, which promises nothing.
  */
-export function allowedOutside(basis: Basis, devices: number, content: number): number | null {
+export function allowedOutside(
+	basis: Basis,
+	devices: number,
+	{ share, confidence }: OutsidePromise
+): number | null {
 	switch (basis) {
 		case 'tested':
 			return 0;
 		case 'sample-tested':
 		case 'correlation':
 		case 'characterized':
-			return Math.floor(devices * (1 - content) + 1e-9);
+			return binomialQuantile(confidence, devices, share);
 		case 'typical':
 			return null;
 		default:

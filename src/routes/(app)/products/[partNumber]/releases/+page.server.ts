@@ -39,7 +39,7 @@ async function comparison(
 }
 
 export const load: PageServerLoad = async ({ locals, params, url, depends }) => {
-	const person = requirePermission(locals, 'product.read');
+	const person = requirePermission(locals, 'release.read');
 	depends('platen:data');
 	const product = await findProductByPartNumber(locals.db, params.partNumber);
 	if (product === undefined) error(404, productNotFound(params.partNumber));
