@@ -32,7 +32,7 @@ type StoredState = Awaited<ReturnType<Awaited<ReturnType<Browser['newContext']>>
 
 /** Signs in once a person and worker; later pages start from the stored session. */
 export const test = base.extend<
-	{ visitAs: (somebody: Somebody, visit?: Visit) => Promise<Page> },
+	{ visitAs: (somebody: Somebody | 'nobody', visit?: Visit) => Promise<Page> },
 	{ sessions: Map<Somebody, StoredState> }
 >({
 	sessions: [
@@ -43,7 +43,7 @@ export const test = base.extend<
 	visitAs: async ({ browser, sessions }, use) => {
 		const opened: Page[] = [];
 		await use(async (somebody, visit = {}) => {
-			const stored = sessions.get(somebody);
+			const stored = somebody === 'nobody' ? undefined : sessions.get(somebody);
 			const context = await browser.newContext({
 				baseURL: origin(),
 				colorScheme: visit.colorScheme ?? 'light',
@@ -53,7 +53,7 @@ export const test = base.extend<
 			});
 			const page = await context.newPage();
 			opened.push(page);
-			if (stored === undefined) {
+			if (stored === undefined && somebody !== 'nobody') {
 				await signIn(page, PEOPLE[somebody]);
 				sessions.set(somebody, await context.storageState());
 			}

@@ -1,0 +1,73 @@
+import AxeBuilder from '@axe-core/playwright';
+import { expect } from '@playwright/test';
+import type { Page } from '@playwright/test';
+import { hydrated, test } from './people';
+import type { Somebody, Visit } from './people';
+
+/** Every page with the demo's data, seen by somebody who may; then empty and refused ones. */
+const PAGES: readonly (readonly [name: string, path: string, somebody: Somebody | 'nobody'])[] = [
+	['sign-in', '/sign-in', 'nobody'],
+	['library-public', '/library', 'nobody'],
+	['library-product-public', '/library/LKT-1130', 'nobody'],
+	['worklist-product', '/worklist', 'product'],
+	['worklist-applications', '/worklist', 'applications'],
+	['worklist-reader', '/worklist', 'reader'],
+	['account', '/account', 'product'],
+	['products', '/products', 'product'],
+	['products-none', '/products?search=nothing-like-it', 'product'],
+	['product-new', '/products/new', 'product'],
+	['product-edit', '/products/LKT-1130/edit', 'product'],
+	['dies', '/dies', 'product'],
+	['die-new', '/dies/new', 'product'],
+	['measurements', '/products/LKT-1130/measurements', 'product'],
+	['measurement-set', '/products/LKT-1130/measurements/sets/1', 'product'],
+	['cv', '/products/LKT-1130/cv', 'product'],
+	['limits', '/products/LKT-1130/limits', 'product'],
+	['datasheet', '/products/LKT-1130/datasheet', 'product'],
+	['datasheet-marketing', '/products/LKR-2406/datasheet', 'marketing'],
+	['verification', '/products/LKR-2406/revisions/1', 'applications'],
+	['verification-done', '/products/LKT-1130/revisions/1', 'applications'],
+	['releases', '/products/LKT-1130/releases', 'marketing'],
+	['releases-none', '/products/LKR-2406/releases', 'marketing'],
+	['templates', '/templates', 'product'],
+	['template', '/templates/tuning', 'product'],
+	['library', '/library', 'reader'],
+	['people', '/administration/people', 'administrator'],
+	['audit', '/administration/audit', 'administrator'],
+	['refused', '/administration/people', 'reader'],
+	['not-found', '/products/LKT-0000', 'product']
+];
+
+const VISITS: readonly (readonly [name: string, visit: Visit])[] = [
+	['light', { colorScheme: 'light' }],
+	['dark', { colorScheme: 'dark' }],
+	['light-390', { colorScheme: 'light', viewport: { width: 390, height: 844 } }]
+];
+
+async function open(page: Page, path: string): Promise<void> {
+	await page.goto(path);
+	await hydrated(page);
+}
+
+/** What no page may do, whatever its width: run out of the window sideways. */
+const overflow = (page: Page) =>
+	page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);
+
+for (const [visitName, visit] of VISITS) {
+	for (const [name, path, somebody] of PAGES) {
+		test(`${name} has nothing for axe to find, ${visitName}`, async ({ visitAs }) => {
+			const page = await visitAs(somebody, visit);
+			await open(page, path);
+			await page.screenshot({
+				path: `tests/.work/screens/${name}-${visitName}.png`,
+				fullPage: true
+			});
+
+			const { violations } = await new AxeBuilder({ page }).analyze();
+			expect(
+				violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' | ')}`)
+			).toEqual([]);
+			expect(await overflow(page)).toBeLessThanOrEqual(0);
+		});
+	}
+}
