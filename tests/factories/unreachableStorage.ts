@@ -9,5 +9,6 @@ export const unreachableStorage: Storage = {
 	put: refuse,
 	putStream: refuse,
 	read: refuse,
-	stream: refuse
+	stream: refuse,
+	isWritable: refuse
 };
