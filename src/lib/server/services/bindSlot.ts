@@ -71,7 +71,7 @@ type Candidate = { readonly status: 'carried'; readonly terms: Terms } | Refused
 /** What would be bound here, or why nothing can be. */
 export async function candidateFor(
 	db: Connection,
-	{ draft, product }: GatheredDraft,
+	{ draft, product, input }: GatheredDraft,
 	place: SlotView,
 	wanted: Omit<SlotToBind, 'partNumber' | 'by' | 'place'>
 ): Promise<Candidate> {
@@ -89,8 +89,13 @@ export async function candidateFor(
 
 	const asked = limitWantedAt(draft.template, place, { policyVersion: policyId, basis });
 	if (asked === undefined) return refuse(draftMessages.nothingComputed(place.label));
-	const { limits } = await computeLimits(db, product.id, [asked]);
-	const row = limits.get(asked.slot)?.[0];
+	const isGathered = place.binding === null && policyId === draft.policyVersion;
+	const row =
+		isGathered && basis === 'characterized'
+			? input.limits
+					.get(asked.slot)
+					?.find(({ condition }) => condition.reverseVoltage === asked.bias)
+			: (await computeLimits(db, product.id, [asked])).limits.get(asked.slot)?.[0];
 	if (row === undefined) return refuse(draftMessages.nothingComputed(place.label));
 	const printed = boundTextsOf(row, { basis, rules: policy.rules });
 	const needed = neededParts(place.required, {
