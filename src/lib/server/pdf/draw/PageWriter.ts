@@ -26,6 +26,9 @@ export class PageWriter {
 	readonly #fonts: FontBook;
 	readonly #operators: string[] = [];
 	readonly #marked: MarkedContent[] = [];
+	/** Ink and font in force, so that they are only written when they change. */
+	#fill = '';
+	#font = '';
 
 	constructor(height: number, fonts: FontBook) {
 		this.#height = height;
@@ -71,6 +74,25 @@ export class PageWriter {
 		this.#operators.push(...operators);
 	}
 
+	#setFill(colour: Colour) {
+		const fill = `${paint(colour)} rg`;
+		if (fill !== this.#fill) this.#add(fill);
+		this.#fill = fill;
+	}
+
+	#setFont(name: string, size: number) {
+		const font = `/${name} ${decimal(size)} Tf`;
+		if (font !== this.#font) this.#add(font);
+		this.#font = font;
+	}
+
+	/** Ends a saved state: what was in force before it is in force again, and no longer known here. */
+	#restore() {
+		this.#add('Q');
+		this.#fill = '';
+		this.#font = '';
+	}
+
 	#box(box: Box): void {
 		switch (box.kind) {
 			case 'text':
@@ -84,7 +106,7 @@ export class PageWriter {
 			case 'drawing':
 				this.#add('q', `1 0 0 1 ${this.#point(box.x, box.y)} cm`);
 				box.marks.forEach((mark) => this.#mark(mark));
-				this.#add('Q');
+				this.#restore();
 				return;
 			default:
 				return box satisfies never;
@@ -96,7 +118,8 @@ export class PageWriter {
 	}
 
 	#text(box: TextBox): void {
-		const lines = [`${paint(INKS[box.ink ?? 'black'])} rg`, 'BT'];
+		this.#setFill(INKS[box.ink ?? 'black']);
+		this.#add('BT');
 		let along = 0;
 		for (const piece of box.pieces) {
 			const { name, operand } = this.#fonts.encode(piece.face, piece.text, piece.kerning);
@@ -104,16 +127,13 @@ export class PageWriter {
 			const matrix = box.turned
 				? `0 -1 1 0 ${this.#point(box.x + rise, box.y + along)}`
 				: `1 0 0 1 ${this.#point(box.x + along, box.y - rise)}`;
-			lines.push(
-				`/${name} ${decimal(piece.size)} Tf`,
-				...(piece.tracking ? [`${decimal(piece.tracking)} Tc`] : []),
-				`${matrix} Tm`,
-				`${operand} TJ`,
-				...(piece.tracking ? ['0 Tc'] : [])
-			);
+			this.#setFont(name, piece.size);
+			if (piece.tracking) this.#add(`${decimal(piece.tracking)} Tc`);
+			this.#add(`${matrix} Tm`, `${operand} TJ`);
+			if (piece.tracking) this.#add('0 Tc');
 			along += piece.width + (piece.after ?? 0);
 		}
-		this.#add(...lines, 'ET');
+		this.#add('ET');
 	}
 
 	#rule(box: RuleBox): void {
@@ -125,7 +145,10 @@ export class PageWriter {
 
 	#rectangle(box: RectangleBox): void {
 		const place = `${this.#point(box.x, box.y + box.height)} ${decimal(box.width)} ${decimal(box.height)} re`;
-		if (box.fill) this.#add(`${paint(INKS[box.fill])} rg`, `${place} f`);
+		if (box.fill) {
+			this.#setFill(INKS[box.fill]);
+			this.#add(`${place} f`);
+		}
 		if (box.stroke)
 			this.#add(
 				`${paint(INKS[box.stroke])} RG ${decimal(box.weight ?? 0.5)} w ${dashes(box.dash)}`,
@@ -146,13 +169,16 @@ export class PageWriter {
 				path(circle(radius, 1)),
 				's'
 			);
-		this.#add('Q');
+		this.#restore();
 	}
 
 	#mark(mark: DrawnMark): void {
 		switch (mark.kind) {
 			case 'path':
-				if (mark.fill) this.#add(`${paint(mark.fill)} rg`, path(mark.steps), 'f');
+				if (mark.fill) {
+					this.#setFill(mark.fill);
+					this.#add(path(mark.steps), 'f');
+				}
 				if (mark.stroke)
 					this.#add(
 						`${paint(mark.stroke.colour)} RG ${decimal(mark.stroke.width)} w ${mark.stroke.cap} J ${mark.stroke.join} j ${dashes(mark.stroke.dash)}`,
@@ -164,9 +190,10 @@ export class PageWriter {
 				const { name, operand } = this.#fonts.encode(mark.face, mark.text);
 				const angle = (mark.angle * Math.PI) / 180;
 				const [cosine, sine] = [Math.cos(angle), Math.sin(angle)];
+				this.#setFill(mark.colour);
+				this.#setFont(name, mark.size);
 				this.#add(
-					`${paint(mark.colour)} rg`,
-					`BT /${name} ${decimal(mark.size)} Tf`,
+					'BT',
 					`${[cosine, sine, -sine, cosine, mark.at[0], -mark.at[1]].map(decimal).join(' ')} Tm`,
 					`${operand} TJ ET`
 				);
@@ -176,7 +203,7 @@ export class PageWriter {
 				this.#add('q', path(mark.steps), 'W n');
 				return;
 			case 'restore':
-				this.#add('Q');
+				this.#restore();
 				return;
 			default:
 				return mark satisfies never;

@@ -2,6 +2,7 @@ import {
 	PDFHexString,
 	PDFName,
 	PDFNumber,
+	PDFString,
 	type PDFContext,
 	type PDFDict,
 	type PDFObject,
@@ -75,7 +76,7 @@ export function writeTags(
 				P: parent ?? root,
 				K: kids.map(({ kid }) => kid),
 				...(page && { Pg: page }),
-				...(node.role === 'Note' && { ID: PDFHexString.fromText(`note-${at}`) }),
+				...(node.role === 'Note' && { ID: PDFString.of(`note-${at}`) }),
 				...details(context, node)
 			})
 		);

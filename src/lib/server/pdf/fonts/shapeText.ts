@@ -77,12 +77,22 @@ const shapeWord = (face: Face, word: string, kerning: boolean): ShapedRun =>
 	remember(`${face} ${kerning} word ${word}`, () => {
 		const font = fontOf(face);
 		const scale = 1000 / font.unitsPerEm;
+		const characters = [...word];
 		const run = font.layout(word, kerning ? FEATURES : WITHOUT_KERNING);
-		const glyphs = run.glyphs.map((glyph, at) => ({
-			id: glyph.id,
-			text: String.fromCodePoint(...glyph.codePoints),
-			advance: glyph.advanceWidth * scale,
-			adjustment: ((run.positions[at]?.xAdvance ?? glyph.advanceWidth) - glyph.advanceWidth) * scale
-		}));
+		// Fontkit's glyphs remember the first characters they were asked for: the text is taken from
+		// the word itself, glyph by character. Where a face joins characters they are set singly.
+		const glyphs =
+			run.glyphs.length === characters.length
+				? run.glyphs.map((glyph, at) => ({
+						id: glyph.id,
+						text: characters[at] ?? '',
+						advance: glyph.advanceWidth * scale,
+						adjustment:
+							((run.positions[at]?.xAdvance ?? glyph.advanceWidth) - glyph.advanceWidth) * scale
+					}))
+				: characters.map((text) => {
+						const glyph = font.glyphForCodePoint(text.codePointAt(0) ?? 0);
+						return { id: glyph.id, text, advance: glyph.advanceWidth * scale, adjustment: 0 };
+					});
 		return { glyphs, width: widthOf(glyphs) };
 	});

@@ -18,9 +18,7 @@ export function capacitanceChartSection(
 	place: { readonly figure: number; readonly isChanged: boolean }
 ): Section {
 	const { structure } = sheet;
-	const head = sectionHead(section.heading, section.conditions, {
-		tag: structure.add('H2', structure.root)
-	});
+	const head = sectionHead(section.heading, section.conditions, { structure });
 	const marks = sheet.charts.get(section);
 	const leftOut = leftOutOfChart(section.points);
 	const caption = breakLines(

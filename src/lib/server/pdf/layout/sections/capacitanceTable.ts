@@ -77,9 +77,7 @@ function columnsOf(
 /** Capacitance at each bias, with its deviation from typical, its ratio and its basis. */
 export function capacitanceTable(section: SectionOf<'capacitance-table'>, sheet: Sheet): Section {
 	const { structure } = sheet;
-	const head = sectionHead(section.heading, section.conditions, {
-		tag: structure.add('H2', structure.root)
-	});
+	const head = sectionHead(section.heading, section.conditions, { structure });
 	const table = structure.add('Table', structure.root);
 	const texts = columnTexts(section);
 	const columns = columnsOf(section, texts);

@@ -34,9 +34,7 @@ interface Family {
 /** Characteristics with conditions, limits and basis, in groups by junction temperature. */
 export function characteristics(section: SectionOf<'characteristics'>, sheet: Sheet): Section {
 	const { structure } = sheet;
-	const head = sectionHead(section.heading, section.note, {
-		tag: structure.add('H2', structure.root)
-	});
+	const head = sectionHead(section.heading, section.note, { structure });
 	const table = structure.add('Table', structure.root);
 	const texts = {
 		minimum: groupThousands(section.rows.map((row) => row.minimum?.text ?? null)),

@@ -55,7 +55,7 @@ function threeColumns(paragraphs: readonly Paragraph[]): Paragraph[][] {
 export function notice(section: SectionOf<'notice'>, sheet: Sheet): Section | null {
 	if (section.paragraphs.length === 0) return null;
 	const { structure } = sheet;
-	const head = sectionHead(section.heading, '', { tag: structure.add('H2', structure.root) });
+	const head = sectionHead(section.heading, '', { structure });
 	const columns = threeColumns(section.paragraphs.map(paragraphOf));
 	const boxes: Box[] = [];
 	let height = 0;

@@ -30,7 +30,7 @@ const COLUMNS: readonly Column[] = [
 /** Ordering codes with package, grade, marking and packing. */
 export function ordering(section: SectionOf<'ordering'>, sheet: Sheet): Section {
 	const { structure } = sheet;
-	const head = sectionHead(section.heading, '', { tag: structure.add('H2', structure.root) });
+	const head = sectionHead(section.heading, '', { structure });
 	const table = structure.add('Table', structure.root);
 	const quantities = groupThousands(section.rows.map(({ quantity }) => String(quantity)));
 	return {

@@ -29,10 +29,7 @@ export function proseParagraphs(
 ): Block {
 	const { structure } = sheet;
 	const boxes: Box[] = [];
-	const head =
-		section.heading === null
-			? null
-			: sectionHead(section.heading, '', { tag: structure.add('H2', structure.root) });
+	const head = section.heading === null ? null : sectionHead(section.heading, '', { structure });
 	const top = head === null ? 0 : head.height + 3;
 	let y = top + FIRST;
 	section.paragraphs.forEach((paragraph, at) => {
@@ -89,11 +86,7 @@ function listColumn(section: SectionOf<'prose'>, at: number, sheet: Sheet): Bloc
 	const { structure } = sheet;
 	const x = at * (THIRD + GUTTER);
 	const style = STYLES.list;
-	const head = sectionHead(section.heading ?? '', '', {
-		tag: structure.add('H2', structure.root),
-		x,
-		width: THIRD
-	});
+	const head = sectionHead(section.heading ?? '', '', { structure, x, width: THIRD });
 	const list = structure.add('L', structure.root);
 	const boxes: Box[] = [...head.boxes];
 	let y = head.height + 9;

@@ -11,9 +11,7 @@ import { continuedHead, sectionHead } from './sectionHead';
 /** Limiting values: what a person typed and answers for; no typical value, no basis. */
 export function ratings(section: SectionOf<'ratings'>, sheet: Sheet): Section {
 	const { structure } = sheet;
-	const head = sectionHead(section.heading, section.note, {
-		tag: structure.add('H2', structure.root)
-	});
+	const head = sectionHead(section.heading, section.note, { structure });
 	const table = structure.add('Table', structure.root);
 	const minimum = groupThousands(section.rows.map((row) => row.minimum?.text ?? null));
 	const maximum = groupThousands(section.rows.map((row) => row.maximum?.text ?? null));

@@ -28,7 +28,7 @@ export function revisionHistory(
 ): Section | null {
 	const { structure, record } = sheet;
 	if (record.history.length === 0) return null;
-	const head = sectionHead(section.heading, '', { tag: structure.add('H2', structure.root) });
+	const head = sectionHead(section.heading, '', { structure });
 	const table = structure.add('Table', structure.root);
 	const heads = headBlock(COLUMNS, { structure, table });
 	return {

@@ -1,8 +1,9 @@
 import { symbolRuns } from '../../../../core/datasheet/symbolRuns';
 import type { RichText } from '../../../../core/datasheet/document';
-import type { Box, Tag } from '../box';
+import type { Box } from '../box';
 import type { Block } from '../flow';
 import { MEASURE } from '../paper';
+import type { Structure } from '../structure';
 import { RULES, STYLES } from '../styles';
 import { breakLines, lineBoxes, oneLine, paragraphBoxes, richSpans, textSpan } from '../typeset';
 
@@ -10,7 +11,8 @@ import { breakLines, lineBoxes, oneLine, paragraphBoxes, richSpans, textSpan } f
 const HEAD = { baseline: 15, height: 19 };
 
 export interface HeadPlace {
-	readonly tag: Tag;
+	/** The tag tree; a repeated head stays out of it. */
+	readonly structure: Structure | null;
 	readonly x?: number;
 	readonly width?: number;
 }
@@ -27,12 +29,15 @@ export function sectionHead(heading: string, note: RichText | string, place: Hea
 	const noteLines = hasRoom ? [noteLine] : breakLines(right, width);
 	const below = HEAD.baseline + (headLines.length - 1) * STYLES.sectionHead.leading;
 	const isEmpty = noteLine.width === 0;
+	const tagOf = (role: 'H2' | 'P') => place.structure?.add(role, place.structure.root) ?? null;
+	const tag = tagOf('H2');
+	const noteTag = isEmpty ? null : tagOf('P');
 
 	const noteBoxes: Box[] = isEmpty
 		? []
 		: noteLines.flatMap((line, at) =>
 				lineBoxes(line, {
-					tag: place.tag,
+					tag: noteTag,
 					x: x + width,
 					y: hasRoom ? HEAD.baseline : below + (at + 1) * STYLES.sectionNote.leading,
 					align: 'right'
@@ -46,11 +51,7 @@ export function sectionHead(heading: string, note: RichText | string, place: Hea
 			(hasRoom || isEmpty ? 0 : noteLines.length * STYLES.sectionNote.leading),
 		boxes: [
 			{ kind: 'rule', tag: null, from: [x, 0], to: [x + width, 0], weight: RULES.section },
-			...paragraphBoxes(
-				headLines,
-				{ tag: place.tag, x, y: HEAD.baseline },
-				STYLES.sectionHead.leading
-			),
+			...paragraphBoxes(headLines, { tag, x, y: HEAD.baseline }, STYLES.sectionHead.leading),
 			...noteBoxes
 		]
 	};
@@ -58,4 +59,4 @@ export function sectionHead(heading: string, note: RichText | string, place: Hea
 
 /** The head of a table's next page. */
 export const continuedHead = (heading: string): Block =>
-	sectionHead(heading, 'continued', { tag: null });
+	sectionHead(heading, 'continued', { structure: null });
