@@ -15,12 +15,14 @@ export interface AndersonDarling {
 /** Fewer values than this have no tabulated distribution. */
 const FEWEST = 8;
 
-/** Beyond this the approximation of the p-value was not fitted; it is then below 1e-23. */
+/** Beyond this the approximation was not fitted; by convention its last value stands for all. */
 const FARTHEST = 10;
+const SMALLEST = 3.7e-24;
 
 /** The p-value of the adjusted statistic when mean and deviation were estimated. */
 export function andersonDarlingPValue(adjusted: number): number {
-	const a = Math.min(adjusted, FARTHEST);
+	const a = adjusted;
+	if (a >= FARTHEST) return SMALLEST;
 	if (a < 0.2) return 1 - Math.exp(-13.436 + 101.14 * a - 223.73 * a * a);
 	if (a < 0.34) return 1 - Math.exp(-8.318 + 42.796 * a - 59.938 * a * a);
 	if (a < 0.6) return Math.exp(0.9177 - 4.279 * a - 1.38 * a * a);

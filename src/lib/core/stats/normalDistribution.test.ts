@@ -26,6 +26,8 @@ it.each([
 it('has nothing left beyond 39 deviations', () => {
 	expect(normalUpperTail(40)).toBe(0);
 	expect(normalLowerTail(40)).toBe(1);
+	expect(normalDensity(Infinity)).toBe(0);
+	expect(normalUpperTail(-Infinity)).toBe(1);
 });
 
 // 1/√(2π), and R: dnorm(3)

@@ -35,6 +35,7 @@ const SQRT_TWO_PI = Math.sqrt(2 * Math.PI);
 
 /** exp(−x²/2) with the square split, so that a far tail keeps its relative accuracy. */
 function gaussian(x: number): number {
+	if (Math.abs(x) > 39) return 0;
 	const head = Math.trunc(x * 16) / 16;
 	return Math.exp((-head * head) / 2) * Math.exp((-(x - head) * (x + head)) / 2);
 }
