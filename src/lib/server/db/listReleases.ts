@@ -1,4 +1,4 @@
-import { asc, desc, eq, inArray } from 'drizzle-orm';
+import { desc, eq, inArray } from 'drizzle-orm';
 import { publicationRecord } from '$lib/core/datasheet/record';
 import type { Database } from './database';
 import { person, release, releaseFile, revision } from './schema';
@@ -48,5 +48,5 @@ function listFiles(db: Database, releases: readonly number[]) {
 		})
 		.from(releaseFile)
 		.where(inArray(releaseFile.release, [...releases]))
-		.orderBy(asc(releaseFile.name));
+		.orderBy(desc(releaseFile.name));
 }

@@ -49,10 +49,13 @@ function integratedFactor(sampleSize: number, { content, confidence }: Assurance
 	return (low + high) / 2;
 }
 
-interface SpreadDensity {
+interface Strips {
 	readonly from: number;
 	readonly to: number;
 	readonly strips: number;
+}
+
+interface SpreadDensity extends Strips {
 	readonly density: (u: number) => number;
 }
 
@@ -75,10 +78,7 @@ function spreadDensity(freedom: number): SpreadDensity {
 }
 
 /** Simpson's rule over equal strips. */
-function simpson(
-	f: (u: number) => number,
-	{ from, to, strips }: Pick<SpreadDensity, 'from' | 'to' | 'strips'>
-): number {
+function simpson(f: (u: number) => number, { from, to, strips }: Strips): number {
 	const width = (to - from) / strips;
 	let sum = f(from) + f(to);
 	for (let strip = 1; strip < strips; strip++)

@@ -21,21 +21,16 @@ import type { Actions, PageServerLoad } from './$types';
 async function comparison(
 	{ db }: App.Locals,
 	partNumber: string,
-	from: string | null,
-	to: string | null
+	before: string | null,
+	after: string | null
 ) {
-	if (from === null || to === null) return null;
-	const [before, after] = [
-		await findRelease(db, partNumber, from),
-		await findRelease(db, partNumber, to)
-	];
-	if (before === undefined || after === undefined) return { status: 'absent' as const, from, to };
-	return {
-		status: 'compared' as const,
-		from,
-		to,
-		changes: compareDocuments(readDocument(before.document), readDocument(after.document))
-	};
+	if (before === null || after === null) return null;
+	const older = await findRelease(db, partNumber, before);
+	const newer = await findRelease(db, partNumber, after);
+	if (older === undefined || newer === undefined)
+		return { status: 'absent' as const, before, after };
+	const changes = compareDocuments(readDocument(older.document), readDocument(newer.document));
+	return { status: 'compared' as const, before, after, changes };
 }
 
 export const load: PageServerLoad = async ({ locals, params, url, depends }) => {
@@ -69,8 +64,8 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 		comparison: await comparison(
 			locals,
 			params.partNumber,
-			url.searchParams.get('from'),
-			url.searchParams.get('to')
+			url.searchParams.get('before'),
+			url.searchParams.get('after')
 		),
 		withdrawing: url.searchParams.get('withdraw'),
 		reinstating: url.searchParams.get('reinstate')
