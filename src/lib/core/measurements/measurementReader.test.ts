@@ -137,7 +137,9 @@ describe('reading', () => {
 
 	it('holds more than one chunk of devices', () => {
 		const lines = Array.from({ length: 2100 }, (_, index) =>
-			[0, 4].map((bias) => `A,1,,,D${index},25,1e6,${bias},${(40 + index / 1000 - bias).toFixed(3)}`)
+			[0, 4].map(
+				(bias) => `A,1,,,D${index},25,1e6,${bias},${(40 + index / 1000 - bias).toFixed(3)}`
+			)
 		).flat();
 		const { table } = read([HEADER, ...lines].join('\n'));
 		const [condition] = table.conditions();

@@ -89,6 +89,8 @@ export const measurementMessages = {
 		`ln C lies ${Math.abs(z) >= 100 ? 'more than 100' : Math.abs(z).toFixed(1)} robust standard deviations ${z < 0 ? 'below' : 'above'} lot ${lot} at ${bias} V; beyond 6 at ${beyond} of ${biases} biases.`,
 	rises: (from: number, to: number, percent: number, times: number) =>
 		`Capacitance rises by ${percent.toPrecision(2)} % from ${from} V to ${to} V${Number.isFinite(times) ? `, ${times.toFixed(0)} times the repeatability` : ''}.`,
+	sweepsWait: (open: number, all: number) =>
+		`${count(open, 'sweep')}${open === all ? '' : ` of ${all}`} ${open === 1 ? 'waits' : 'wait'} for a verdict.`,
 	notSuspect: () => 'This sweep isn’t in quarantine, so there is nothing to decide.',
 	setNotAccepted: () => 'This measurement set isn’t accepted.',
 	reasonNeeded: () => 'Say why, so that the next person can judge it.',
