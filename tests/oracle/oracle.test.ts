@@ -47,11 +47,10 @@ it('has no reason without a row', () => {
 	expect(idle.map(({ reason }) => reason)).toEqual([]);
 });
 
-it('counts 1323 rows', () => {
+it('checks 1001 of 1323 rows', () => {
 	const isChecked = (row: (typeof ROWS)[number]) => CHECKS.some(({ covers }) => covers(row));
 	const checked = ROWS.filter(isChecked).length;
 	expect(ROWS).toHaveLength(1323);
 	expect(new Set(ROWS.map(({ id }) => id)).size).toBe(1323);
-	console.log(checked);
-	expect(checked).toBeGreaterThan(900);
+	expect(checked).toBe(1001);
 });
