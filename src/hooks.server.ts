@@ -19,10 +19,11 @@ import { personOfSession } from '$lib/server/auth/personOfSession';
 import { personOfToken } from '$lib/server/auth/personOfToken';
 import { bodyLimit } from '$lib/server/auth/bodyLimit';
 import { isOwnOrigin } from '$lib/server/auth/ownOrigin';
+import { ConfigError } from '$lib/server/config';
 import { problem } from '$lib/server/problem';
 
 export const init: ServerInit = async () => {
-	await openApplication(process.env);
+	await openApplication(process.env).catch(refuseToStart);
 	if (dev) return;
 
 	// The server waits for its open requests before it says `shutdown`, and event streams never end
@@ -30,6 +31,13 @@ export const init: ServerInit = async () => {
 	for (const signal of ['SIGTERM', 'SIGINT']) process.once(signal, () => void stopWork());
 	process.once('sveltekit:shutdown', () => void closeApplication());
 };
+
+/** What an operator has to put right is said in one line, without the insides of the program. */
+function refuseToStart(problem: unknown): never {
+	if (!(problem instanceof ConfigError)) throw problem;
+	process.stderr.write(`${problem.message}\n`);
+	process.exit(1);
+}
 
 const CHANGES = new Set(['POST', 'PUT', 'PATCH', 'DELETE']);
 const REQUEST_ID = /^[\w.-]{1,64}$/;
