@@ -53,7 +53,7 @@ export function boundTo({ kind, binding }: Pick<SlotRow, 'kind' | 'binding'>): s
 	if (binding === null) return kind === 'rating' ? 'rating' : 'limit';
 	switch (binding.kind) {
 		case 'limit':
-			return `limit, ${binding.basis}`;
+			return binding.basis;
 		case 'rating':
 			return 'typed';
 		case 'struck-out':

@@ -6,7 +6,7 @@ const text = (value: unknown) => new TextDecoder().decode(canonicalBytes(value))
 // RFC 8785, section 3.2.2 and its result in 3.2.3.
 it('writes the example of RFC 8785', () => {
 	const example = {
-		numbers: [333333333.33333329, 1e30, 4.5, 2e-3, 0.000000000000000000000000001],
+		numbers: [Number('333333333.33333329'), 1e30, 4.5, 2e-3, 0.000000000000000000000000001],
 		string: '\u20ac$\u000F\u000aA\'\u0042\u0022\u005c\\"/',
 		literals: [null, true, false]
 	};
