@@ -16,7 +16,9 @@ export interface PersonChange {
 }
 
 export type ChangePersonOutcome =
-	{ readonly status: 'changed' } | { readonly status: 'refused'; readonly message: string };
+	| { readonly status: 'changed' }
+	| { readonly status: 'absent' }
+	| { readonly status: 'refused'; readonly message: string };
 
 /** Changes a person's name, roles and right to sign in; who may no longer is signed out. */
 export function changePerson(
@@ -28,7 +30,12 @@ export function changePerson(
 		if (!staysAdministrator && !(await isAnotherAdministrator(tx, id))) {
 			return { status: 'refused', message: lastAdministrator() };
 		}
-		await tx.update(person).set({ name, isActive }).where(eq(person.id, id));
+		const [changed] = await tx
+			.update(person)
+			.set({ name, isActive })
+			.where(eq(person.id, id))
+			.returning({ id: person.id });
+		if (changed === undefined) return { status: 'absent' };
 		await tx.delete(personRole).where(eq(personRole.person, id));
 		await tx.insert(personRole).values(roles.map((role) => ({ person: id, role })));
 		if (!isActive) await tx.delete(session).where(eq(session.userId, id));

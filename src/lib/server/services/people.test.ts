@@ -65,6 +65,12 @@ it('changes name and roles, and writes it into the audit trail', async () => {
 	expect((await actions()).at(-1)).toBe('person.change');
 });
 
+it('changes nobody who is not there', async () => {
+	await add('Per', 'administrator');
+	expect(await change('nobody', ['reader'])).toEqual({ status: 'absent' });
+	expect(await actions()).toEqual(['person.add']);
+});
+
 it.each<[string, readonly Role[], boolean]>([
 	['the role', ['reader'], true],
 	['the right to sign in', ['administrator'], false]

@@ -29,6 +29,7 @@ export const actions: Actions = {
 			person: params.person,
 			by: administrator.id
 		});
+		if (outcome.status === 'absent') error(404, notFound());
 		if (outcome.status === 'refused') return setError(form, 'roles._errors', outcome.message);
 		redirect(303, '/administration/people');
 	}
