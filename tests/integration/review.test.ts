@@ -10,6 +10,7 @@ import {
 } from '$lib/core/messages/verification';
 import {
 	documentDamaged,
+	evidenceNotReady,
 	flagNeedsComment,
 	mayNotVerifyOwnEdit,
 	mayNotVerifyOwnSubmission,
@@ -21,7 +22,7 @@ import {
 	rowsStillOpen
 } from '$lib/core/messages/review';
 import type { LimitRow } from '$lib/core/limits/limit';
-import type { ComputedEvidence } from '$lib/core/review/verificationEvidence';
+import type { ComputedEvidence, VerificationEvidence } from '$lib/core/review/verificationEvidence';
 import { findRevisionById } from '$lib/server/db/findRevision';
 import { listComments } from '$lib/server/db/listComments';
 import { listDecisions } from '$lib/server/db/listDecisions';
@@ -34,13 +35,15 @@ import {
 	limitMemo,
 	revision as revisionTable,
 	sweepBlock,
-	templateVersion
+	templateVersion,
+	verificationRow
 } from '$lib/server/db/schema';
 import { write } from '$lib/server/db/write';
 import { commentOnRow } from '$lib/server/services/commentOnRow';
 import { decideRevision } from '$lib/server/services/decideRevision';
 import { freezeRevision } from '$lib/server/services/freezeRevision';
 import { sha256 } from '$lib/server/services/sha256';
+import { verifyEvidence } from '$lib/server/services/verifyEvidence';
 import { tickLowRisk, verifyRow } from '$lib/server/services/verifyRow';
 import { ENGINEER } from '../factories/acceptedSet';
 import { approve, BIASES, documentOf, openReviewBench, submit } from '../factories/reviewBench';
@@ -463,4 +466,31 @@ describe('deciding', () => {
 
 it('has words for a loosened part', () => {
 	expect(concernLoosened('minimum')).toBe('Minimum is loosened against the release before.');
+});
+
+describe('evidence that a job gathers', () => {
+	it('fills in what was left pending, so that it can be ticked', async () => {
+		const id = await submit(bench, documentOf(await bench.limitRows()));
+		const before = await evidenceAt(id, AT_4_V);
+		const pending: VerificationEvidence = {
+			...before,
+			computed: { status: 'pending' },
+			risk: 'pending'
+		};
+		await write(bench.stores.db, (tx) =>
+			tx.update(verificationRow).set({ evidence: pending }).where(eq(verificationRow.row, AT_4_V))
+		);
+		const tick = () =>
+			verifyRow(bench.stores, { revision: id, row: AT_4_V, verdict: 'tick', by: 'tomas' });
+		expect(await tick()).toEqual({ status: 'refused', message: evidenceNotReady() });
+		expect(
+			await verifyEvidence(
+				bench.stores,
+				{ revision: id },
+				{ id: 1, attempt: 1, report: () => undefined, isCurrent: () => Promise.resolve(true) }
+			)
+		).toEqual({ rows: 1 });
+		expect(await evidenceAt(id, AT_4_V)).toEqual(before);
+		expect((await tick()).status).toBe('verified');
+	});
 });
