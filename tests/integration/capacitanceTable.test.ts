@@ -177,7 +177,7 @@ describe('the table of a product', () => {
 				'Verdicts',
 				'Mean of ln C',
 				'Spread of ln C',
-				'Lots compared',
+				'Lots compared, F',
 				'Factor k₁',
 				'Raw minimum',
 				'Drift over life',

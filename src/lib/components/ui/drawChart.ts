@@ -44,6 +44,8 @@ export async function drawChart(box: HTMLElement, spec: TopLevelSpec): Promise<V
 		logLevel: vega.Error
 	});
 	await view.runAsync();
+	// The box says in words what is drawn; what Vega calls its groups says nothing.
+	box.querySelector('svg')?.setAttribute('aria-hidden', 'true');
 	return view;
 }
 

@@ -167,7 +167,7 @@ function lotStep(lots: LotTest): DerivationStep {
 			? 'The lots differ and are pooled all the same: the limit speaks of these lots.'
 			: `No difference is seen; that ${lots.lots} lots are alike is not shown by it. They are pooled.`;
 	return {
-		name: 'Lots compared',
+		name: 'Lots compared, F',
 		method: `One-way analysis of variance between ${lots.lots} wafer lots, F(${lots.betweenDegrees}, ${lots.withinDegrees}), ${pValue(lots.p)}. ${verdict}`,
 		value: Number.isFinite(lots.F) ? lots.F : null,
 		unit: '',

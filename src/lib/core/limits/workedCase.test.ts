@@ -73,6 +73,6 @@ it('finds the raw limits 14.238 and 15.801 pF and prints 14.2 and 15.9', () => {
 });
 
 it('warns that the lots differ, with F = 19.95', () => {
-	expect(step('Lots compared')?.text).toBe('19.95');
+	expect(step('Lots compared, F')?.text).toBe('19.95');
 	expect(row.warnings.join(' ')).toContain('F\u00a0=\u00a019.95');
 });
