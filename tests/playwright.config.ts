@@ -15,6 +15,8 @@ export default defineConfig({
 	reporter: [['line'], ['json', { outputFile: '.work/playwright.json' }]],
 	use: {
 		trace: 'retain-on-failure',
+		actionTimeout: 15_000,
+		navigationTimeout: 30_000,
 		launchOptions: {
 			executablePath: '/usr/bin/chromium',
 			args: [

@@ -29,6 +29,7 @@ export async function createProduct(page: Page, partNumber: string, die: string)
 	await page.getByLabel('Package').fill('SOD-323');
 	await page.getByLabel('Die', { exact: true }).selectOption({ label: die });
 	await page.getByLabel('Description').fill('Hyperabrupt silicon variable-capacitance diode');
+	await page.getByRole('button', { name: 'Add an ordering code' }).click();
 	await page.getByLabel('Code', { exact: true }).first().fill(`${partNumber}-R7`);
 	await page.getByLabel('Grade').first().fill('standard');
 	await page.getByLabel('Marking').first().fill('K7');
