@@ -60,14 +60,22 @@ export interface LimitMark {
 	readonly labelX: number;
 }
 
-/** The marks of the printed limits, with labels at least `gap` apart. */
-export function limitMarks(limits: LimitNumbers, scale: ValueScale, gap: number): LimitMark[] {
+/**
+ * The marks of the printed limits. Labels stand at least `gap` apart and with their middle at least
+ * half of that within the figure, so that none is cut.
+ */
+export function limitMarks(
+	limits: LimitNumbers,
+	scale: ValueScale,
+	{ gap, width }: { readonly gap: number; readonly width: number }
+): LimitMark[] {
 	const typical = limits.typical === null ? null : scale.at(limits.typical);
+	const within = (x: number) => Math.min(width - gap / 2, Math.max(gap / 2, x));
 	const mark = (kind: LimitMark['kind'], value: number | null, side: -1 | 1): LimitMark[] => {
 		if (value === null) return [];
 		const x = scale.at(value);
 		const free = typical === null ? x : typical + side * gap;
-		return [{ kind, x, labelX: side < 0 ? Math.min(x, free) : Math.max(x, free) }];
+		return [{ kind, x, labelX: within(side < 0 ? Math.min(x, free) : Math.max(x, free)) }];
 	};
 	return [
 		...mark('min', limits.minimum, -1),

@@ -1,13 +1,13 @@
 import { error } from '@sveltejs/kit';
+import { spreadIn } from '$lib/components/limits/derivationOf';
 import { gridRow } from '$lib/components/limits/gridRow';
 import { describePolicy } from '$lib/core/limits/describePolicy';
 import { limitMessages } from '$lib/core/messages/limits';
 import { readNumber } from '$lib/core/units/readNumber';
 import { requirePermission } from '$lib/server/auth/requirePermission';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
+import { chosenCurve } from '$lib/server/services/chosenCurve';
 import { limitsProgress } from '$lib/server/services/limitsProgress';
-import { spreadIn } from '../limits/derivationOf';
-import { curveOf } from './curveOf';
 import type { PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async ({ locals, params, url, depends }) => {
@@ -16,7 +16,7 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 	const product = await findProductByPartNumber(locals.db, params.partNumber);
 	if (product === undefined) error(404, limitMessages.noSuchProduct(params.partNumber));
 
-	const { choice, curve } = await curveOf(locals.db, product, url.searchParams);
+	const { choice, curve } = await chosenCurve(locals.db, product, url.searchParams);
 	const { policies, policy, basis } = choice;
 	const asked = readNumber(url.searchParams.get('bias') ?? '');
 	const rows = curve?.rows ?? [];

@@ -1,4 +1,5 @@
 import { error } from '@sveltejs/kit';
+import { derivationOf, shownSide } from '$lib/components/limits/derivationOf';
 import { gridRow } from '$lib/components/limits/gridRow';
 import { describePolicy, methodText } from '$lib/core/limits/describePolicy';
 import { resolutionText } from '$lib/core/limits/resolutionText';
@@ -10,7 +11,6 @@ import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber'
 import { limitsChoice } from '$lib/server/services/limitsChoice';
 import { limitsOverview } from '$lib/server/services/limitsOverview';
 import { limitsProgress } from '$lib/server/services/limitsProgress';
-import { derivationOf, shownSide } from './derivationOf';
 import type { PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async ({ locals, params, url, depends }) => {

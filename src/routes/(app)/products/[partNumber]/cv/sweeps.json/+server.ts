@@ -4,7 +4,7 @@ import { requirePermission } from '$lib/server/auth/requirePermission';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
 import { problem } from '$lib/server/problem';
 import { sampleSweeps } from '$lib/server/services/sampleSweeps';
-import { curveOf } from '../curveOf';
+import { chosenCurve } from '$lib/server/services/chosenCurve';
 import type { RequestHandler } from './$types';
 
 /** At most 80 sweeps to draw behind the band, biases in V, capacitances in `unit`. */
@@ -12,7 +12,7 @@ export const GET: RequestHandler = async ({ locals, params, url }) => {
 	requirePermission(locals, 'measurement.read');
 	const product = await findProductByPartNumber(locals.db, params.partNumber);
 	if (product === undefined) return problem(404, limitMessages.noSuchProduct(params.partNumber));
-	const { curve } = await curveOf(locals.db, product, url.searchParams);
+	const { curve } = await chosenCurve(locals.db, product, url.searchParams);
 	if (curve === undefined) return problem(409, limitMessages.noDistributions());
 
 	const number = (value: { readonly text: string } | null) =>

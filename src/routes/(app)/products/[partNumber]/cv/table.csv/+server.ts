@@ -3,7 +3,7 @@ import { csvText } from '$lib/core/csvText';
 import { limitMessages } from '$lib/core/messages/limits';
 import { requirePermission } from '$lib/server/auth/requirePermission';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
-import { curveOf } from '../curveOf';
+import { chosenCurve } from '$lib/server/services/chosenCurve';
 import type { RequestHandler } from './$types';
 
 const HEAD = [
@@ -26,7 +26,7 @@ export const GET: RequestHandler = async ({ locals, params, url }) => {
 	requirePermission(locals, 'limit.read');
 	const product = await findProductByPartNumber(locals.db, params.partNumber);
 	if (product === undefined) error(404, limitMessages.noSuchProduct(params.partNumber));
-	const { curve } = await curveOf(locals.db, product, url.searchParams);
+	const { curve } = await chosenCurve(locals.db, product, url.searchParams);
 
 	const percent = (value: number | null) => (value === null ? '' : value.toFixed(3));
 	const lines = (curve?.rows ?? []).map(({ limit, betweenPercent, withinPercent }) => [

@@ -1,12 +1,6 @@
-import {
-	frequencyText,
-	gridRow,
-	SHOWN,
-	signedText,
-	type Shown
-} from '$lib/components/limits/gridRow';
-import type { Derivation } from '$lib/components/limits/derivation';
-import type { Spread } from '$lib/components/limits/spreadFigure';
+import { frequencyText, gridRow, SHOWN, signedText, type Shown } from './gridRow';
+import type { Derivation } from './derivation';
+import type { Spread } from './spreadFigure';
 import { histogram } from '$lib/core/distributions/histogram';
 import type { Distribution } from '$lib/core/distributions/summary';
 import { describePolicy } from '$lib/core/limits/describePolicy';

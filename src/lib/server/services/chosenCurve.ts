@@ -1,10 +1,10 @@
 import { readNumber } from '$lib/core/units/readNumber';
-import type { Connection } from '$lib/server/db/database';
-import { capacitanceCurve, type CapacitanceCurve } from '$lib/server/services/capacitanceCurve';
-import { limitsChoice, type LimitsChoice } from '$lib/server/services/limitsChoice';
+import type { Connection } from '../db/database';
+import { capacitanceCurve, type CapacitanceCurve } from './capacitanceCurve';
+import { limitsChoice, type LimitsChoice } from './limitsChoice';
 
 /** The curve that an address asks for, and by which policy; `curve` is missing without data. */
-export async function curveOf(
+export async function chosenCurve(
 	db: Connection,
 	product: { readonly id: number; readonly basisHash: string | null },
 	search: URLSearchParams
