@@ -7,9 +7,11 @@ export interface Import {
 	/** `src/…` for our own, the package's name otherwise. */
 	readonly target: string;
 	readonly isOwn: boolean;
+	/** `import type`: gone when the program runs. */
+	readonly isTypeOnly: boolean;
 }
 
-const SPECIFIER = /(?:\bfrom|\bimport)\s*\(?\s*'([^']+)'/g;
+const SPECIFIER = /(?:\b(?:import|export)\s+(type\s)?[^'"();]*?\bfrom|\bimport)\s*\(?\s*'([^']+)'/g;
 
 /** Every source file below `src/`, tests left out. */
 export function sourceFiles(): string[] {
@@ -29,9 +31,14 @@ function ownPath(file: string, specifier: string): string | undefined {
 
 /** What a file imports, from its text; also what stands in a dynamic `import()`. */
 export function importsIn(file: string, text: string): Import[] {
-	return [...text.matchAll(SPECIFIER)].map(([, specifier = '']) => {
+	return [...text.matchAll(SPECIFIER)].map(([, type, specifier = '']) => {
 		const own = ownPath(file, specifier);
-		return { file, target: own ?? specifier, isOwn: own !== undefined };
+		return {
+			file,
+			target: own ?? specifier,
+			isOwn: own !== undefined,
+			isTypeOnly: type !== undefined
+		};
 	});
 }
 
