@@ -22,7 +22,7 @@ async function heard(response: Response, wanted: string): Promise<boolean> {
 	const decoder = new TextDecoder();
 	let said = '';
 	for await (const part of response.body ?? []) {
-		said += decoder.decode(part as Uint8Array, { stream: true });
+		said += decoder.decode(part, { stream: true });
 		if (said.includes(wanted)) return true;
 	}
 	return false;

@@ -42,8 +42,8 @@ async function ended(id: number) {
 }
 
 const handlers: Record<string, JobHandler> = {
-	double: (_stores, payload, { report }) => {
-		report({ done: 1, total: 2, words: 'doubles' });
+	double: (_stores, payload, context) => {
+		context.report({ done: 1, total: 2, words: 'doubles' });
 		return Promise.resolve({ twice: Number(payload) * 2 });
 	},
 	refuse: () => Promise.reject(new RefusalError('The file has no lot column. Map one.')),
