@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { expect, it } from 'vitest';
-import { RESULT_WIDTH } from './capacitanceFit';
+import { RESULT_WIDTH } from './capacitanceFitResult';
 import { modelCapacitance } from './capacitanceModel';
 import { JunctionDataError } from './errors';
 import { fitCapacitance, fitSweeps } from './fitCapacitance';

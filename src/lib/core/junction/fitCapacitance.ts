@@ -1,5 +1,5 @@
+import { CapacitanceFitter } from './capacitanceFit';
 import {
-	CapacitanceFitter,
 	CONVERGED,
 	FLAGS,
 	IDENTIFIABLE,
@@ -8,7 +8,7 @@ import {
 	RMS,
 	type FixedParameters,
 	type ParameterName
-} from './capacitanceFit';
+} from './capacitanceFitResult';
 import type { CapacitanceModel } from './capacitanceModel';
 import { JunctionDataError } from './errors';
 
