@@ -1,4 +1,4 @@
-import type { z } from 'zod';
+import { inconsistencies } from './inconsistencies';
 import { template, type Template } from './template';
 
 /** A template that isn't one: every place that is wrong, each with its path. */
@@ -32,11 +32,24 @@ export function readTemplate(text: string, source: string): Template {
 /** As `readTemplate`, of JSON that is parsed already. */
 export function parseTemplate(json: unknown, source: string): Template {
 	const parsed = template.safeParse(json);
-	if (!parsed.success) throw new TemplateError(source, parsed.error.issues.map(describeIssue));
+	const problems = parsed.success
+		? inconsistencies(parsed.data.sections).map(({ path, ...rest }) => ({
+				path: ['sections', ...path],
+				...rest
+			}))
+		: parsed.error.issues;
+	if (!parsed.success || problems.length > 0)
+		throw new TemplateError(source, problems.map(describeProblem));
 	return parsed.data;
 }
 
 /** `sections.3.slots.0.unit: Invalid input: expected string, received number`. */
-function describeIssue({ path, message }: z.core.$ZodIssue): string {
+function describeProblem({
+	path,
+	message
+}: {
+	readonly path: readonly PropertyKey[];
+	readonly message: string;
+}): string {
 	return path.length === 0 ? message : `${path.map(String).join('.')}: ${message}`;
 }

@@ -1,6 +1,5 @@
 import { z } from 'zod';
 import { letterSymbol } from '../characteristics/symbol';
-import { inconsistencies } from './inconsistencies';
 
 export const PRODUCT_CLASSES = [
 	'rectifier',
@@ -99,20 +98,17 @@ export const templateSection = z.discriminatedUnion('kind', [
 ]);
 export type TemplateSection = z.infer<typeof templateSection>;
 
-/** A datasheet template: data, not code; one JSON file a product class. */
-export const template = z
-	.object({
-		format: z.literal('platen-template-1'),
-		key,
-		name: z.string().min(1),
-		productClass,
-		/** Which standard asks for the essential slots, and what of that is from memory. */
-		sources: z.string(),
-		sections: z.array(templateSection).min(1)
-	})
-	.superRefine(({ sections }, context) => {
-		for (const { path, message } of inconsistencies(sections)) {
-			context.addIssue({ code: 'custom', path: ['sections', ...path], message });
-		}
-	});
+/**
+ * The shape of a datasheet template: data, not code; one JSON file a product class. What a shape
+ * can't say is checked by `parseTemplate` as well.
+ */
+export const template = z.object({
+	format: z.literal('platen-template-1'),
+	key,
+	name: z.string().min(1),
+	productClass,
+	/** Which standard asks for the essential slots, and what of that is from memory. */
+	sources: z.string(),
+	sections: z.array(templateSection).min(1)
+});
 export type Template = z.infer<typeof template>;

@@ -1,6 +1,5 @@
 import type { Binding, LimitBinding } from '$lib/core/datasheet/binding';
 import type { LimitAddress } from '$lib/core/datasheet/bindPlace';
-import type { Basis } from '$lib/core/limits/basis';
 import type { LimitRow } from '$lib/core/limits/limit';
 import type { PolicyVersion } from '$lib/core/limits/policy';
 import type { Template } from '$lib/core/template/template';
@@ -8,17 +7,7 @@ import type { Connection } from '../db/database';
 import type { FoundDraft } from '../db/findDraft';
 import { findPolicyVersion } from '../db/findPolicies';
 import { capacitanceTable } from './capacitanceTable';
-import { limitWantedAt } from './limitWantedAt';
-
-/** One number a place asks the measurements for. */
-export interface LimitWanted {
-	readonly slot: string;
-	readonly temperatureCelsius: number;
-	readonly frequency: number | undefined;
-	readonly bias: number;
-	readonly policyVersion: number;
-	readonly declaredBasis: Basis | undefined;
-}
+import { limitWantedAt, type LimitWanted } from './limitWantedAt';
 
 export interface DraftLimits {
 	/** By slot, in the order asked. */

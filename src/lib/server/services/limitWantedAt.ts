@@ -1,8 +1,17 @@
 import type { SlotView } from '$lib/core/datasheet/resolveInput';
 import type { Basis } from '$lib/core/limits/basis';
 import type { Template } from '$lib/core/template/template';
-import type { LimitWanted } from './draftLimits';
 import { CAPACITANCE } from './readBasis';
+
+/** One number a place asks the measurements for. */
+export interface LimitWanted {
+	readonly slot: string;
+	readonly temperatureCelsius: number;
+	readonly frequency: number | undefined;
+	readonly bias: number;
+	readonly policyVersion: number;
+	readonly declaredBasis: Basis | undefined;
+}
 
 /** The number a place asks for, or `undefined` where no computation gives its characteristic. */
 export function limitWantedAt(
