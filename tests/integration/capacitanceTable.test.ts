@@ -24,42 +24,7 @@ import { ensurePolicies } from '$lib/server/services/ensurePolicies';
 import { unreachableStorage } from '../factories/unreachableStorage';
 import { ENGINEER, insertAcceptedSet, insertProduct } from '../factories/acceptedSet';
 import { openTestDatabase } from '../factories/testDatabase';
-
-const BIASES = [0, 1, 4, 10];
-const LOTS = ['LK26-011', 'LK26-014', 'LK26-019'];
-const PER_LOT = 100;
-const FREQUENCY = 1e6;
-const KEY = 'T=25;f=1000000';
-
-/** A linear congruential generator: the same spread in every run. */
-function* pseudoRandom(seed: number): Generator<number> {
-	for (let state = seed; ;) {
-		state = (state * 1_103_515_245 + 12_345) % 2 ** 31;
-		yield state / 2 ** 31;
-	}
-}
-
-const devices = LOTS.flatMap((lot) =>
-	Array.from({ length: PER_LOT }, (_, i) => ({
-		lot,
-		wafer: `0${1 + Math.floor(i / 25)}`,
-		name: String(i + 1)
-	}))
-);
-
-/** Capacitances in pF with three decimals, as a tester writes them. */
-function sweeps(seed: number): Float64Array {
-	const random = pseudoRandom(seed);
-	const uniform = () => Number(random.next().value);
-	return Float64Array.from(
-		devices.flatMap(({ lot }) => {
-			const spread = 0.03 * (uniform() + uniform() + uniform() - 1.5) + LOTS.indexOf(lot) * 0.004;
-			return BIASES.map((bias) =>
-				Number((40 * (1 + bias / 2) ** -1.1 * Math.exp(spread * (1 + bias / 50))).toFixed(3))
-			);
-		})
-	);
-}
+import { BIASES, columnOf, devices, FREQUENCY, SWEEP_KEY, sweeps } from '../factories/threeLots';
 
 const at25 = sweeps(7);
 const at85 = sweeps(11);
@@ -137,9 +102,6 @@ function printedAt(value: number, round: (steps: number) => number): string {
 	const decimals = value >= 10 ? 1 : 2;
 	return (round(Number((value * 10 ** decimals).toFixed(6))) / 10 ** decimals).toFixed(decimals);
 }
-
-const columnOf = (values: Float64Array, bias: number) =>
-	[...values].filter((_, i) => i % BIASES.length === BIASES.indexOf(bias));
 
 // SciPy 1.17.1: nct.ppf(0.975, 299, norm.ppf(0.99)*sqrt(300))/sqrt(300)
 const FACTOR_300 = 2.561245344955934;
@@ -254,7 +216,7 @@ describe('quarantine and verdicts', () => {
 			tx.insert(verdict).values({
 				set: setId,
 				device: DEVICE,
-				conditionKey: KEY,
+				conditionKey: SWEEP_KEY,
 				decision,
 				reason: 'Contact seen on the probe camera',
 				by: ENGINEER,
@@ -267,7 +229,7 @@ describe('quarantine and verdicts', () => {
 
 	it('leave a suspect out at its condition only, and say so', async () => {
 		await write(opened.db, (tx) =>
-			tx.insert(suspect).values({ set: setId, device: DEVICE, conditionKey: KEY, reason: {} })
+			tx.insert(suspect).values({ set: setId, device: DEVICE, conditionKey: SWEEP_KEY, reason: {} })
 		);
 		await computeNow();
 		const [row] = (await tableOf({ biases: [4] })).rows;
