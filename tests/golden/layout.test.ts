@@ -142,7 +142,7 @@ describe('what is long or empty', () => {
 				if (section.kind === 'notice') return { ...section, paragraphs: [] };
 				if ('rows' in section) return { ...section, rows: [] };
 				return section;
-			}) as DatasheetDocument['sections']
+			})
 		};
 		const { pages, bookmarks } = await layout(document, { ...releaseRecord, history: [] });
 		expect(pages).toHaveLength(1);

@@ -229,7 +229,7 @@ function biasChannel(biases: LogAxis, theme: ChartTheme, show: { readonly hasLab
 /** Deviation in % on a linear axis, symmetrical about typical. */
 function deviationChannel(furthest: number, theme: ChartTheme) {
 	const end = (furthest === 0 ? 5 : furthest) * 1.18;
-	const step = [50, 20, 10, 5, 2, 1, 0.5, 0.2, 0.1].find((each) => each * 2 <= end) ?? 0.1;
+	const step = [50, 20, 10, 5, 2, 1, 0.5, 0.2, 0.1].find((each) => each * 1.5 <= end) ?? 0.1;
 	const ticks = Math.min(Math.floor(end / step), 20);
 	return {
 		type: 'quantitative' as const,

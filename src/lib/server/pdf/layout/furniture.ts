@@ -32,7 +32,8 @@ export function runningHead(
 	const words = statusWords(document.status, record);
 	// A proof's bar reaches down to the head's usual place.
 	const y = paper.headBaseline + (record.kind === 'release' ? 0 : mm(0.8));
-	const right = `version ${words.version}\u00a0\u00a0\u00a0\u00a0\u00a0${words.date}`;
+	const version = record.version === null ? words.version : `version ${words.version}`;
+	const right = `${version}\u00a0\u00a0\u00a0\u00a0\u00a0${words.date}`;
 	const rightWidth = widthOf(right, STYLES.running);
 	const wordWidth = widthOf(words.word, STYLES.runningStatus);
 	const wordX = MEASURE - rightWidth - 14 - wordWidth;

@@ -125,7 +125,7 @@ export function proofKey(): Box[] {
 	};
 	const box = (label: typeof stale) => {
 		boxes.push(...stateBoxes(label, x, y));
-		x += stateBoxWidth(label);
+		x += stateBoxWidth(label) + 2;
 	};
 	words('Proof marks:\u00a0', STYLES.footnoteBold);
 	words('dotted underline, digits bound to a limit\u00a0\u00a0·\u00a0\u00a0');

@@ -30,7 +30,7 @@ export function statusWords(status: DatasheetStatus, record: PublicationRecord):
 		disc: 'dashed ring',
 		word: PROOFS[record.kind],
 		addition: ', not for release',
-		version: version === null ? 'not numbered yet' : `${version} proposed`,
+		version: version === null ? 'no version yet' : `${version} proposed`,
 		date: `proof of ${proofTime(record.at)}`
 	};
 }
