@@ -25,7 +25,7 @@ export const MEANING_NAMES = {
 	lot: 'lot',
 	waferLot: 'wafer lot',
 	wafer: 'wafer',
-	site: 'site on the wafer',
+	site: 'site',
 	element: 'element',
 	device: 'device',
 	temperature: 'temperature',

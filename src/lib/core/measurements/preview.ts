@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import { readNumber } from '../units/readNumber';
 import { columnMeaning, recogniseColumns } from './columns';
 import { recogniseBiasSign } from './recogniseBiasSign';
 import { fileDialect, recogniseDialect } from './dialect';
@@ -15,8 +14,6 @@ export const uploadPreview = z.object({
 	columns: z.array(
 		z.object({
 			header: z.string(),
-			/** Whether all of its first fields are numbers. */
-			isNumeric: z.boolean(),
 			/** As recognised; *ignore* when the header is not known. */
 			meaning: columnMeaning,
 			/** From the header, else `null`: it is asked for, never guessed. */
@@ -67,8 +64,6 @@ export function previewUpload(
 		)
 	);
 	const recognised = recogniseColumns(headers);
-	const numbersIn = (position: number) =>
-		sample.map(({ fields }) => readNumber(fields[position] ?? '', dialect.decimalMark));
 	return {
 		status: 'read',
 		preview: {
@@ -76,7 +71,6 @@ export function previewUpload(
 			lineCount: file.lineCount,
 			columns: headers.map((header, position) => ({
 				header,
-				isNumeric: numbersIn(position).every((value) => value !== undefined),
 				meaning: recognised[position]?.meaning ?? 'ignore',
 				unit: recognised[position]?.unit?.symbol ?? null
 			})),
