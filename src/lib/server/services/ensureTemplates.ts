@@ -36,16 +36,14 @@ async function ensureTemplate(tx: Database, template: Template, at: string): Pro
 	if (stored.some((version) => version.hash === hash)) return;
 
 	const number = (stored[0]?.number ?? 0) + 1;
-	await tx
-		.insert(templateVersion)
-		.values({
-			template: template.key,
-			number,
-			json: template,
-			hash,
-			createdAt: at,
-			createdBy: null
-		});
+	await tx.insert(templateVersion).values({
+		template: template.key,
+		number,
+		json: template,
+		hash,
+		createdAt: at,
+		createdBy: null
+	});
 	await appendAudit(tx, {
 		action: 'template.import',
 		subject: `template ${template.key} version ${number}`,
