@@ -153,7 +153,7 @@ describe('what a sheet refuses', () => {
 	it('a character that the faces lack, by name', async () => {
 		const document = { ...tuningDiode(), description: 'diode 二极管' };
 		await expect(renderDatasheet(document, releaseRecord)).rejects.toThrow(
-			'The faces of the printed sheet have no “二” (U+4E8C), “极” (U+6781), “管” (U+7BA1)'
+			'The faces of the printed sheet have no “二” (U+4E8C), “极” (U+6781), “管” (U+7BA1).'
 		);
 	});
 });

@@ -3,4 +3,4 @@ const named = (character: string) =>
 	`“${character}” (U+${(character.codePointAt(0) ?? 0).toString(16).toUpperCase().padStart(4, '0')})`;
 
 export const charactersNotInFaces = (characters: readonly string[]) =>
-	`The faces of the printed sheet have no ${characters.map(named).join(', ')}`;
+	`The faces of the printed sheet have no ${characters.map(named).join(', ')}.`;

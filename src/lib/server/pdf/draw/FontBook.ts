@@ -2,12 +2,15 @@ import { PDFHexString, PDFName, PDFString, type PDFContext, type PDFRef } from '
 import { FACES, fontFile, fontOf, type Face } from '../fonts/faces';
 import { shapeText, type ShapedGlyph } from '../fonts/shapeText';
 import { subsetTrueType } from '../fonts/subsetTrueType';
+import { RefusalError } from '../../../core/errors';
 import { charactersNotInFaces } from '../../../core/messages/print';
 import { decimal } from './decimal';
 
-/** A text asked for characters that its face lacks: it would have printed as boxes. */
-export class CharacterNotInFaceError extends Error {
-	override readonly name = 'CharacterNotInFaceError';
+/**
+ * A text asked for characters that its face lacks: they would have printed as boxes. Whoever wrote
+ * the text can change it, so that the sentence is shown to them.
+ */
+export class CharacterNotInFaceError extends RefusalError {
 	constructor(
 		readonly face: Face,
 		readonly characters: readonly string[]
