@@ -5,7 +5,7 @@ import { ORIGIN } from './servedApplication';
 /** How the server answered, in the terms of the access table. */
 export type Answer =
 	| { readonly status: 'passed'; readonly code: number }
-	/** 401 or 403, or the way to the sign-in page. */
+	/** 401 or 403, or the way to the sign-in page and back. */
 	| { readonly status: 'refused'; readonly code: number }
 	| { readonly status: 'broken'; readonly code: number };
 
@@ -114,7 +114,7 @@ async function bodyOf(response: Response): Promise<Said> {
 }
 
 function answer(code: number, location: string | null | undefined): Answer {
-	if (code === 401 || code === 403 || (location ?? '').startsWith('/sign-in'))
+	if (code === 401 || code === 403 || (location ?? '').startsWith('/sign-in?to='))
 		return { status: 'refused', code };
 	return { status: code >= 500 ? 'broken' : 'passed', code };
 }
