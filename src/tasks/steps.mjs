@@ -100,7 +100,9 @@ export async function build() {
 	const wanted = hashOf(SOURCES);
 	if (written(BUILT) === wanted) return;
 	rmSync(BUILT, { force: true });
-	await run('npm', ['run', '--silent', 'build'], { quiet: true });
+	// Called from a test, NODE_ENV is `test`, and the framework would build its development side.
+	const env = { ...process.env, NODE_ENV: 'production' };
+	await run('npm', ['run', '--silent', 'build'], { env, quiet: true });
 	writeFileSync(BUILT, wanted);
 }
 

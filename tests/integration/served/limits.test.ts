@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { mayNot } from '$lib/core/messages';
 import { limitMessages } from '$lib/core/messages/limits';
 import { computeDistributions } from '$lib/server/services/computeDistributions';
 import { insertAcceptedSet, insertProduct } from '../../factories/acceptedSet';
@@ -33,7 +34,7 @@ beforeAll(async () => {
 		}
 	);
 }, 60_000);
-afterAll(() => served.stop());
+afterAll(() => served.stop(), 30_000);
 
 const API = '/api/v1/products/LKT-1130/capacitance-table';
 const ask = (path: string, role: 'product_engineer' | 'reader' = 'product_engineer') =>
@@ -113,7 +114,9 @@ describe('the table over the API', () => {
 	});
 
 	it('is not for readers', async () => {
-		expect((await ask(`${API}?temperatureCelsius=25`, 'reader')).status).toBe(403);
+		const response = await ask(`${API}?temperatureCelsius=25`, 'reader');
+		expect(response.status).toBe(403);
+		expect(await response.json()).toMatchObject({ detail: mayNot('limit.read') });
 	});
 
 	it('takes the policies it lists', async () => {
