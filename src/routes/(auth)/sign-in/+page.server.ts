@@ -4,7 +4,8 @@ import { fail, setError, superValidate } from 'sveltekit-superforms';
 import { zod as zod4 } from 'superforms-zod';
 import { notFound } from '$lib/core/messages';
 import { signInPaused, signInRefused } from '$lib/core/messages/people';
-import { ROLE_NAMES } from '$lib/core/review/permissions';
+import { ROLE_NAMES, ROLES } from '$lib/core/review/permissions';
+import type { Role } from '$lib/core/review/permissions';
 import { signInForm } from '$lib/forms/signIn';
 import { checkSignIn } from '$lib/server/auth/signIn';
 import { findPersonByEmail } from '$lib/server/db/findSignedIn';
@@ -13,6 +14,9 @@ import { listPeople } from '$lib/server/db/listPeople';
 import type { Actions, PageServerLoad } from './$types';
 
 const DEMO_EMAIL = /@larkmoor\.test$/;
+
+/** People stand in the order in which the job passes through their hands. */
+const rank = (roles: readonly Role[]) => Math.min(...roles.map((role) => ROLES.indexOf(role)));
 
 /** A place in this application; anything else would send people away from it. */
 function wayBack(url: URL): string {
@@ -38,6 +42,7 @@ export const load: PageServerLoad = async ({ locals, url }) => {
 		organization: organization.name,
 		demoPeople: people
 			.filter(({ email, isActive }) => isActive && DEMO_EMAIL.test(email))
+			.toSorted((one, other) => rank(one.roles) - rank(other.roles))
 			.map(({ name, email, roles }) => ({
 				name,
 				email,
