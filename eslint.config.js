@@ -17,7 +17,15 @@ export default defineConfig(
 		languageOptions: {
 			globals: { ...globals.browser, ...globals.node },
 			parserOptions: {
-				projectService: { allowDefaultProject: ['*.js', 'src/tasks/*.mjs', 'tests/*.mjs'] },
+				projectService: {
+					allowDefaultProject: [
+						'*.js',
+						'drizzle.config.ts',
+						'tailwind.config.ts',
+						'src/tasks/*.mjs',
+						'tests/*.mjs'
+					]
+				},
 				tsconfigRootDir: import.meta.dirname,
 				extraFileExtensions: ['.svelte']
 			}
