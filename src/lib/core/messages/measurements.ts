@@ -7,6 +7,7 @@ const count = (size: number, one: string, many = `${one}s`) =>
 export const measurementMessages = {
 	// The file as a whole
 	emptyFile: () => 'The file is empty.',
+	noBody: () => 'No file came. Send its bytes as the body, with a Content-Type such as text/csv.',
 	notText: () => 'This isn’t a text file. Save the measurements as CSV and upload that.',
 	utf16: () => 'The file is written in UTF-16. Save it as UTF-8 and upload it again.',
 	notATable: () =>

@@ -7,6 +7,7 @@ import { listMeasurementSets } from '$lib/server/db/listMeasurementSets';
 import { problem } from '$lib/server/problem';
 import { receiveUpload } from '$lib/server/services/receiveUpload';
 import type { RequestHandler } from './$types';
+import { bodyPieces } from './bodyPieces';
 
 const STATUS = { noProduct: 404, noName: 400, empty: 400, tooLarge: 413, duplicate: 409 } as const;
 
@@ -31,12 +32,13 @@ export const GET: RequestHandler = async ({ locals, params }) => {
 /** Takes the raw body as a file and answers at once; the first look at it is a job. */
 export const POST: RequestHandler = async ({ locals, params, request, url }) => {
 	const person = requirePermission(locals, 'measurement.upload');
-	if (request.body === null) return problem(400, measurementMessages.emptyFile());
+	// The framework gives no body when the request doesn't say what it is.
+	if (request.body === null) return problem(400, measurementMessages.noBody());
 
 	const outcome = await receiveUpload(locals, {
 		partNumber: params.partNumber,
 		fileName: url.searchParams.get('filename') ?? '',
-		body: request.body,
+		body: bodyPieces(request.body),
 		by: person.id,
 		limit: locals.uploadLimit
 	});
