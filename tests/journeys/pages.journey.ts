@@ -2,7 +2,7 @@ import AxeBuilder from '@axe-core/playwright';
 import { expect } from '@playwright/test';
 import type { Page } from '@playwright/test';
 import { hydrated, test } from './people';
-import type { Somebody, Visit } from './people';
+import type { Somebody } from './people';
 
 /** Every page with the demo's data, seen by somebody who may; then empty and refused ones. */
 const PAGES: readonly (readonly [name: string, path: string, somebody: Somebody | 'nobody'])[] = [
@@ -38,36 +38,37 @@ const PAGES: readonly (readonly [name: string, path: string, somebody: Somebody 
 	['not-found', '/products/LKT-0000', 'product']
 ];
 
-const VISITS: readonly (readonly [name: string, visit: Visit])[] = [
-	['light', { colorScheme: 'light' }],
-	['dark', { colorScheme: 'dark' }],
-	['light-390', { colorScheme: 'light', viewport: { width: 390, height: 844 } }]
-];
-
 async function open(page: Page, path: string): Promise<void> {
 	await page.goto(path);
 	await hydrated(page);
+}
+
+const picture = (page: Page, name: string) =>
+	page.screenshot({ path: `tests/.work/screens/${name}.png`, fullPage: true });
+
+async function findings(page: Page): Promise<string[]> {
+	const { violations } = await new AxeBuilder({ page }).analyze();
+	return violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' | ')}`);
 }
 
 /** What no page may do, whatever its width: run out of the window sideways. */
 const overflow = (page: Page) =>
 	page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);
 
-for (const [visitName, visit] of VISITS) {
-	for (const [name, path, somebody] of PAGES) {
-		test(`${name} has nothing for axe to find, ${visitName}`, async ({ visitAs }) => {
-			const page = await visitAs(somebody, visit);
-			await open(page, path);
-			await page.screenshot({
-				path: `tests/.work/screens/${name}-${visitName}.png`,
-				fullPage: true
-			});
+for (const [name, path, somebody] of PAGES) {
+	test(`${name}: axe finds nothing, light and dark, and it fits a phone`, async ({ visitAs }) => {
+		const page = await visitAs(somebody);
+		await open(page, path);
+		await picture(page, `${name}-light`);
+		expect(await findings(page)).toEqual([]);
 
-			const { violations } = await new AxeBuilder({ page }).analyze();
-			expect(
-				violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' | ')}`)
-			).toEqual([]);
-			expect(await overflow(page)).toBeLessThanOrEqual(0);
-		});
-	}
+		await page.emulateMedia({ colorScheme: 'dark' });
+		await picture(page, `${name}-dark`);
+		expect(await findings(page)).toEqual([]);
+
+		await page.setViewportSize({ width: 390, height: 844 });
+		await picture(page, `${name}-390`);
+		expect(await findings(page)).toEqual([]);
+		expect(await overflow(page)).toBeLessThanOrEqual(0);
+	});
 }

@@ -11,11 +11,6 @@ export const PEOPLE = {
 } as const;
 export type Somebody = keyof typeof PEOPLE;
 
-export interface Visit {
-	readonly colorScheme?: 'light' | 'dark';
-	readonly viewport?: { readonly width: number; readonly height: number };
-}
-
 /** The address the suite's server answers at. */
 export function origin(): string {
 	const address = process.env[ORIGIN_VARIABLE];
@@ -32,7 +27,7 @@ type StoredState = Awaited<ReturnType<Awaited<ReturnType<Browser['newContext']>>
 
 /** Signs in once a person and worker; later pages start from the stored session. */
 export const test = base.extend<
-	{ visitAs: (somebody: Somebody | 'nobody', visit?: Visit) => Promise<Page> },
+	{ visitAs: (somebody: Somebody | 'nobody') => Promise<Page> },
 	{ sessions: Map<Somebody, StoredState> }
 >({
 	sessions: [
@@ -42,12 +37,12 @@ export const test = base.extend<
 	],
 	visitAs: async ({ browser, sessions }, use) => {
 		const opened: Page[] = [];
-		await use(async (somebody, visit = {}) => {
+		await use(async (somebody) => {
 			const stored = somebody === 'nobody' ? undefined : sessions.get(somebody);
 			const context = await browser.newContext({
 				baseURL: origin(),
-				colorScheme: visit.colorScheme ?? 'light',
-				viewport: visit.viewport ?? { width: 1280, height: 900 },
+				colorScheme: 'light',
+				viewport: { width: 1280, height: 900 },
 				acceptDownloads: true,
 				...(stored === undefined ? {} : { storageState: stored })
 			});

@@ -177,9 +177,9 @@ export const upload = sqliteTable('upload', {
 	state: text({ enum: ['received', 'read', 'mapped', 'accepted', 'refused'] }).notNull(),
 	/** `uploadPreview` of core: columns, first lines, recognised mapping, problems found so far. */
 	preview: text({ mode: 'json' }),
-	/** `columnMapping` of core, as the person confirmed it. */
+	/** `confirmedMapping` of core: the mapping and the set-up, as the person confirmed them. */
 	mapping: text({ mode: 'json' }),
-	/** `lineProblem[]` of core: why it was refused, line by line. */
+	/** `uploadProblems` of core: why it was refused, how many lines, and the first of them. */
 	problems: text({ mode: 'json' }),
 	uploadedBy: text()
 		.notNull()
