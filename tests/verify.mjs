@@ -80,6 +80,31 @@ async function suite(name, args, report, count) {
 	});
 }
 
+async function typesBuildAndTests() {
+	await check('Types', 'npx', [
+		'--no-install',
+		'svelte-check',
+		'--tsconfig',
+		'./tsconfig.json',
+		'--fail-on-warnings',
+		'--output',
+		'human'
+	]);
+	await alone(() => step('Build', build));
+	await suite(
+		'Unit and integration tests',
+		[
+			'vitest',
+			'run',
+			'--reporter=dot',
+			'--reporter=json',
+			'--outputFile.json=tests/.work/vitest.json'
+		],
+		'vitest.json',
+		countVitest
+	);
+}
+
 const countVitest = (report) => ({
 	passed: report.numPassedTests,
 	failed:
@@ -106,31 +131,11 @@ try {
 	execFileSync('npx', ['--no-install', 'svelte-kit', 'sync'], { cwd: ROOT, stdio: 'ignore' });
 
 	await check('Format', 'npx', ['--no-install', 'prettier', '--check', '--log-level=warn', '.']);
+	// Two cores: linting takes as long as everything else that needs no browser.
 	await Promise.all([
 		check('Lint', 'npx', ['--no-install', 'eslint', '.', '--max-warnings=0']),
-		check('Types', 'npx', [
-			'--no-install',
-			'svelte-check',
-			'--tsconfig',
-			'./tsconfig.json',
-			'--fail-on-warnings',
-			'--output',
-			'human'
-		])
+		typesBuildAndTests()
 	]);
-	await alone(() => step('Build', build));
-	await suite(
-		'Unit and integration tests',
-		[
-			'vitest',
-			'run',
-			'--reporter=dot',
-			'--reporter=json',
-			'--outputFile.json=tests/.work/vitest.json'
-		],
-		'vitest.json',
-		countVitest
-	);
 	await suite(
 		'Browser tests',
 		['playwright', 'test', '--config', 'tests/playwright.config.ts'],
