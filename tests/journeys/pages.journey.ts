@@ -49,8 +49,9 @@ async function picture(page: Page, name: string): Promise<void> {
 	await page.screenshot({ path: `tests/.work/screens/${name}.png`, fullPage: true });
 }
 
-async function findings(page: Page): Promise<string[]> {
-	const { violations } = await new AxeBuilder({ page }).analyze();
+async function findings(page: Page, rules?: readonly string[]): Promise<string[]> {
+	const axe = new AxeBuilder({ page });
+	const { violations } = await (rules ? axe.withRules([...rules]) : axe).analyze();
 	return violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' | ')}`);
 }
 
@@ -67,7 +68,8 @@ for (const [name, path, somebody] of PAGES) {
 
 		await page.emulateMedia({ colorScheme: 'dark' });
 		await picture(page, `${name}-dark`);
-		expect(await findings(page)).toEqual([]);
+		// The other colours are all that the dark side changes.
+		expect(await findings(page, ['color-contrast'])).toEqual([]);
 
 		await page.setViewportSize({ width: 390, height: 844 });
 		await picture(page, `${name}-390`);
