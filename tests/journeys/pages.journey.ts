@@ -50,7 +50,8 @@ async function picture(page: Page, name: string): Promise<void> {
 }
 
 async function findings(page: Page, rules?: readonly string[]): Promise<string[]> {
-	const axe = new AxeBuilder({ page });
+	// The rows of a table are alike: its first ten stand for the rest.
+	const axe = new AxeBuilder({ page }).exclude('tbody tr:nth-child(n+11)');
 	const { violations } = await (rules ? axe.withRules([...rules]) : axe).analyze();
 	return violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' | ')}`);
 }
