@@ -80,6 +80,11 @@ async function suite(name, args, report, count) {
 	});
 }
 
+async function formatAndLint() {
+	await check('Format', 'npx', ['--no-install', 'prettier', '--check', '--log-level=warn', '.']);
+	await check('Lint', 'npx', ['--no-install', 'eslint', '.', '--max-warnings=0']);
+}
+
 async function typesBuildAndTests() {
 	await check('Types', 'npx', [
 		'--no-install',
@@ -130,12 +135,8 @@ try {
 	await alone(() => step('Install', install));
 	execFileSync('npx', ['--no-install', 'svelte-kit', 'sync'], { cwd: ROOT, stdio: 'ignore' });
 
-	await check('Format', 'npx', ['--no-install', 'prettier', '--check', '--log-level=warn', '.']);
-	// Two cores: linting takes as long as everything else that needs no browser.
-	await Promise.all([
-		check('Lint', 'npx', ['--no-install', 'eslint', '.', '--max-warnings=0']),
-		typesBuildAndTests()
-	]);
+	// Two cores: formatting and linting take as long as everything else that needs no browser.
+	await Promise.all([formatAndLint(), typesBuildAndTests()]);
 	await suite(
 		'Browser tests',
 		['playwright', 'test', '--config', 'tests/playwright.config.ts'],
