@@ -4,7 +4,12 @@ import { chiSquareQuantile } from './chiSquare';
 import { OutsideDomainError } from './errors';
 import { groupSums } from './groupSums';
 import { nestedStrata, oneWayStrata } from './lotStrata';
-import { lotsToleranceHalfWidth, lotsToleranceMargin } from './lotsToleranceMargin';
+import {
+	lotsHalfWidthConfidence,
+	lotsMarginConfidence,
+	lotsToleranceHalfWidth,
+	lotsToleranceMargin
+} from './lotsToleranceMargin';
 import { normalQuantile } from './normalQuantile';
 
 const NESTED = nestedStrata([
@@ -96,6 +101,70 @@ it('never tightens with more content or confidence, and scales with the data', (
 			).toBeCloseTo(1, 6);
 		}),
 		{ numRuns: 25 }
+	);
+});
+
+const nestedDesign = (lots: number, ofLots: number, ofWafers: number, ofDevices: number) => ({
+	mean: 0,
+	lots,
+	effectiveSize: 8,
+	strata: [
+		{ variance: ofLots, degrees: lots - 1, share: 1 },
+		{ variance: ofWafers, degrees: 2 * lots, share: 2 / 3 },
+		{ variance: ofDevices, degrees: 21 * lots, share: 7 / 8 }
+	]
+});
+
+// A quadrature of another order, over Z and the lots with a chi-square tail of the devices
+// innermost, spacing 0.05 (scratch script, TypeScript): both agree to 2e-6 in the confidence
+it.each([
+	[1 / 25, 0.99, 0.975, 3.88338307],
+	[1, 0.9, 0.9, 4.498142],
+	[5e-4, 0.9, 0.9, 1.41701662],
+	[1e-6, 0.99, 0.975, 2.7236196]
+])(
+	'has the margin of a fine quadrature for lots of variance %d',
+	(variance, content, confidence, margin) => {
+		const strata = {
+			mean: 0,
+			lots: 3,
+			effectiveSize: 25,
+			strata: [
+				{ variance, degrees: 2, share: 1 },
+				{ variance: 1, degrees: 72, share: 0.96 }
+			]
+		};
+		expect(lotsToleranceMargin(strata, { content, confidence }) / margin).toBeCloseTo(1, 3);
+	}
+);
+
+it('keeps just the confidence asked for, also far out', () => {
+	const variance = fc.oneof(
+		fc.constant(0),
+		fc.double({ min: 1e-6, max: 1, noNaN: true }),
+		fc.constantFrom(1e-9, 1e4)
+	);
+	const content = fc.constantFrom(0.5001, 0.9, 0.99, 0.9999, 0.999999);
+	const confidence = fc.constantFrom(0.5, 0.9, 0.95, 0.975, 0.999);
+	fc.assert(
+		fc.property(
+			fc.integer({ min: 3, max: 15 }),
+			variance,
+			variance,
+			content,
+			confidence,
+			(lots, ofLots, ofWafers, content, confidence) => {
+				const strata = nestedDesign(lots, ofLots, ofWafers, 1);
+				const margin = lotsToleranceMargin(strata, { content, confidence });
+				const halfWidth = lotsToleranceHalfWidth(strata, { content, confidence });
+				expect(lotsMarginConfidence(strata, content, margin)).toBeCloseTo(confidence, 6);
+				expect(lotsHalfWidthConfidence(strata, content, halfWidth)).toBeCloseTo(confidence, 6);
+				expect(lotsMarginConfidence(strata, content, margin * 1.01)).toBeGreaterThan(
+					lotsMarginConfidence(strata, content, margin * 0.99)
+				);
+			}
+		),
+		{ numRuns: 40 }
 	);
 });
 

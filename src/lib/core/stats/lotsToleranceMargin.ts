@@ -1,81 +1,26 @@
 import { chiSquareUpperTail } from './chiSquare';
-import { OutsideDomainError } from './errors';
-import { bracketIncreasing, findRoot } from './findRoot';
-import { logChiSquareRule } from './logChiSquareRule';
 import type { LotStrata, Stratum } from './lotStrata';
-import { normalLowerTail } from './normalDistribution';
 import { normalQuantile } from './normalQuantile';
 import { requireProbability } from './requireProbability';
+import { solveNear } from './solveNear';
+import { tabulatedLowerTail } from './tabulatedNormal';
 import type { TolerancePromise } from './toleranceFactor';
+import {
+	deviationOf,
+	leastSmoothing,
+	NEGLIGIBLE,
+	spreadOf,
+	splitStrata,
+	sumOfSpreads,
+	sumOfTwo,
+	totalVariance
+} from './varianceSpread';
 
 /** Spacing of the quadrature over the lots, in deviations: their few degrees matter most. */
 const LOT_STEP = 0.3;
 
-/** Bounds of the spacing within lots; the finest is for lots that hardly differ. */
-const WIDEST_STEP = 0.9;
-const FINEST_STEP = 0.08;
-
 /** A first solution on a rule this much wider tells where to look with the fine one. */
 const SCOUT = 2;
-
-/** Products of weights below this are left out of the sum. */
-const NEGLIGIBLE = 1e-10;
-
-/** Deviations beyond which a normal probability is 0 or 1 for this purpose. */
-const CERTAIN = 7;
-
-/** A discrete stand-in for the distribution of a variance: values and their probabilities. */
-interface Spread {
-	readonly values: Float64Array;
-	readonly weights: Float64Array;
-}
-
-/** Generalized variance of one stratum: share · SS/U over the distribution of U. */
-function spreadOf({ variance, degrees, share }: Stratum, step: number): Spread {
-	const { nodes, weights } = logChiSquareRule(degrees, step);
-	return { values: nodes.map((u) => (share * variance * degrees) / u), weights };
-}
-
-/** Distribution of the sum of two independent variances. */
-function sumOf(first: Spread, second: Spread): Spread {
-	const values: number[] = [];
-	const weights: number[] = [];
-	for (let i = 0; i < first.values.length; i++)
-		for (let j = 0; j < second.values.length; j++) {
-			const weight = first.weights[i]! * second.weights[j]!;
-			if (weight < NEGLIGIBLE) continue;
-			values.push(first.values[i]! + second.values[j]!);
-			weights.push(weight);
-		}
-	return { values: Float64Array.from(values), weights: Float64Array.from(weights) };
-}
-
-/**
- * Everything below the lot: wafers and devices together. What the lots do to a limit smooths the
- * integrand over the rest; the less they do, the finer the rest must be taken.
- */
-function spreadWithinLots(strata: readonly Stratum[], smoothing: number, widening: number): Spread {
-	let smooth = smoothing;
-	const spreads = strata.map((stratum) => {
-		const deviation = Math.sqrt(2 / stratum.degrees) * stratum.share * stratum.variance;
-		const widest = stratum.degrees > 30 ? WIDEST_STEP : WIDEST_STEP / 2;
-		const step = deviation > 0 ? Math.min(widest, smooth / deviation) : widest;
-		smooth = Math.hypot(smooth, deviation);
-		return spreadOf(stratum, widening * Math.max(FINEST_STEP, step));
-	});
-	return spreads.reduce(sumOf);
-}
-
-function split(strata: LotStrata): readonly [Stratum, readonly Stratum[]] {
-	const [lots, ...within] = strata.strata;
-	if (!lots || within.length === 0)
-		throw new OutsideDomainError('lots tolerance limit', 'at least 2 strata', strata.strata.length);
-	return [lots, within];
-}
-
-function total(strata: LotStrata): number {
-	return strata.strata.reduce((sum, { variance, share }) => sum + variance * share, 0);
-}
 
 /**
  * How far a one-sided limit lies from the mean, so that with the confidence at least the content of
@@ -91,25 +36,85 @@ function total(strata: LotStrata): number {
 export function lotsToleranceMargin(strata: LotStrata, promise: TolerancePromise): number {
 	requireProbability('lotsToleranceMargin', 'a content', promise.content);
 	requireProbability('lotsToleranceMargin', 'a confidence', promise.confidence);
-	const scale = Math.sqrt(total(strata));
+	const scale = Math.sqrt(totalVariance(strata));
 	if (scale === 0) return 0;
-	const z = normalQuantile(promise.content);
-	const scout = solveFrom(marginExcess(strata, z, promise.confidence, SCOUT), z * scale, scale);
-	return solveFrom(marginExcess(strata, z, promise.confidence, 1), scout, scale / 1000);
+	return solve(marginConfidence, strata, normalQuantile(promise.content), promise, scale);
 }
 
-/** Confidence of a margin, less the confidence asked for. */
-function marginExcess(
+/**
+ * The generalized confidence that a margin keeps: {@link lotsToleranceMargin} the other way round.
+ * A simulation needs no more than this.
+ *
+ * @throws {OutsideDomainError} unless the content lies between 0 and 1
+ */
+export function lotsMarginConfidence(strata: LotStrata, content: number, margin: number): number {
+	requireProbability('lotsMarginConfidence', 'a content', content);
+	return marginConfidence(strata, normalQuantile(content), 1)(margin);
+}
+
+/**
+ * Half the distance between limits that hold the content *between both* for future lots: the
+ * γ-quantile of z·√(V_L(1 + 1/a) + …), z the quantile of (1 + P)/2. The innermost integral, over the
+ * lots unless they hardly vary, is a chi-square tail.
+ *
+ * Source: Liao, Lin and Iyer 2005, Technometrics 47; Krishnamoorthy and Mathew 2009, section 4.5.
+ *
+ * @throws {OutsideDomainError} unless content and confidence lie between 0 and 1
+ */
+export function lotsToleranceHalfWidth(strata: LotStrata, promise: TolerancePromise): number {
+	requireProbability('lotsToleranceHalfWidth', 'a content', promise.content);
+	requireProbability('lotsToleranceHalfWidth', 'a confidence', promise.confidence);
+	const scale = Math.sqrt(totalVariance(strata));
+	if (scale === 0) return 0;
+	const z = normalQuantile((1 + promise.content) / 2);
+	return solve(halfWidthConfidence, strata, z, promise, scale);
+}
+
+/**
+ * The generalized confidence that a half-width keeps: {@link lotsToleranceHalfWidth} the other way
+ * round.
+ *
+ * @throws {OutsideDomainError} unless the content lies between 0 and 1
+ */
+export function lotsHalfWidthConfidence(
+	strata: LotStrata,
+	content: number,
+	halfWidth: number
+): number {
+	requireProbability('lotsHalfWidthConfidence', 'a content', content);
+	return halfWidthConfidence(strata, normalQuantile((1 + content) / 2), 1)(halfWidth);
+}
+
+/** Confidence as a function of the reach of a limit, by a quadrature with steps widened so much. */
+type ConfidenceOf = (strata: LotStrata, z: number, widening: number) => (reach: number) => number;
+
+function solve(
+	confidenceOf: ConfidenceOf,
 	strata: LotStrata,
 	z: number,
-	confidence: number,
-	widening: number
-): (margin: number) => number {
-	const [lots, within] = split(strata);
+	{ confidence }: TolerancePromise,
+	scale: number
+): number {
+	const fine = confidenceOf(strata, z, 1);
+	const wide = confidenceOf(strata, z, SCOUT);
+	return solveNear(
+		(reach) => fine(reach) - confidence,
+		(reach) => wide(reach) - confidence,
+		Math.abs(z) * scale,
+		scale
+	);
+}
+
+function marginConfidence(strata: LotStrata, z: number, widening: number) {
+	const [lots, within] = splitStrata(strata);
 	const between = spreadOf(lots, widening * LOT_STEP);
 	/** An error of the mean moves a limit as an error of 2√(V_L/a)·√V/z in the variance would. */
-	const smoothing = Math.sqrt((lots.variance / strata.lots) * total(strata)) / Math.abs(z);
-	const inside = spreadWithinLots(within, smoothing, widening);
+	const perError = Math.sqrt(totalVariance(strata)) / Math.abs(z);
+	const smoothing = Math.sqrt(lots.variance / strata.lots) * perError;
+	const inside = sumOfSpreads(within, smoothing, widening);
+	/** Where lots are so alike that the quadrature can't follow, the mean is taken for a little less sure. */
+	const least = widening * leastSmoothing(within);
+	const surest = Math.max(0, least ** 2 - smoothing ** 2) / perError ** 2;
 
 	/** z·S and √(a/V_L) of every pair of nodes, and the weight of the pair. */
 	const size = between.values.length * inside.values.length;
@@ -119,7 +124,7 @@ function marginExcess(
 	let count = 0;
 	for (let i = 0; i < between.values.length; i++) {
 		const lotVariance = between.values[i]!;
-		const ofMean = 1 / Math.sqrt(lotVariance / strata.lots + Number.MIN_VALUE);
+		const ofMean = 1 / Math.sqrt(lotVariance / strata.lots + surest + Number.MIN_VALUE);
 		for (let j = 0; j < inside.values.length; j++) {
 			const product = between.weights[i]! * inside.weights[j]!;
 			if (product < NEGLIGIBLE) continue;
@@ -129,60 +134,38 @@ function marginExcess(
 			count++;
 		}
 	}
-	return (margin) => {
+	return (margin: number) => {
 		let reached = 0;
-		for (let i = 0; i < count; i++) {
-			const x = (margin - reach[i]!) * inverse[i]!;
-			if (x > CERTAIN) reached += weight[i]!;
-			else if (x > -CERTAIN) reached += weight[i]! * normalLowerTail(x);
-		}
-		return reached - confidence;
+		for (let i = 0; i < count; i++)
+			reached += weight[i]! * tabulatedLowerTail((margin - reach[i]!) * inverse[i]!);
+		return reached;
 	};
 }
 
-/**
- * Half the distance between limits that hold the content *between both* for future lots: the
- * γ-quantile of z·√(V_L(1 + 1/a) + …), z the quantile of (1 + P)/2. The innermost integral, over the
- * lots, is a chi-square tail.
- *
- * Source: Liao, Lin and Iyer 2005, Technometrics 47; Krishnamoorthy and Mathew 2009, section 4.5.
- *
- * @throws {OutsideDomainError} unless content and confidence lie between 0 and 1
- */
-export function lotsToleranceHalfWidth(strata: LotStrata, promise: TolerancePromise): number {
-	requireProbability('lotsToleranceHalfWidth', 'a content', promise.content);
-	requireProbability('lotsToleranceHalfWidth', 'a confidence', promise.confidence);
-	const scale = Math.sqrt(total(strata));
-	if (scale === 0) return 0;
-	const z = normalQuantile((1 + promise.content) / 2);
-	const scout = solveFrom(halfWidthExcess(strata, z, promise.confidence, SCOUT), z * scale, scale);
-	return solveFrom(halfWidthExcess(strata, z, promise.confidence, 1), scout, scale / 1000);
-}
-
-/** Confidence of a half-width, less the confidence asked for. */
-function halfWidthExcess(
-	strata: LotStrata,
-	z: number,
-	confidence: number,
-	widening: number
-): (halfWidth: number) => number {
-	const [lots, within] = split(strata);
-	const inside = spreadWithinLots(within, lots.variance / 2, widening);
-	const sumOfSquares = lots.variance * lots.degrees * (1 + 1 / strata.lots);
-	return (halfWidth) => {
+function halfWidthConfidence(strata: LotStrata, z: number, widening: number) {
+	const [lots, within] = splitStrata(strata);
+	const ofBoth = { ...lots, share: 1 + 1 / strata.lots };
+	const innermost = deviationOf(ofBoth) < leastSmoothing(within) ? widestOf(within) : ofBoth;
+	const others = within.filter((stratum) => stratum !== innermost);
+	const belowLots = sumOfSpreads(others, deviationOf(innermost) / 2.5, widening);
+	const outside =
+		innermost === ofBoth
+			? belowLots
+			: sumOfTwo(spreadOf(ofBoth, (widening * LOT_STEP) / 2), belowLots);
+	const sumOfSquares = innermost.share * innermost.variance * innermost.degrees;
+	return (halfWidth: number) => {
 		const variance = (halfWidth / z) ** 2;
 		let reached = 0;
-		for (let i = 0; i < inside.values.length; i++) {
-			const room = variance - inside.values[i]!;
+		for (let i = 0; i < outside.values.length; i++) {
+			const room = variance - outside.values[i]!;
 			if (room <= 0) continue;
-			reached += inside.weights[i]! * chiSquareUpperTail(sumOfSquares / room, lots.degrees);
+			reached += outside.weights[i]! * chiSquareUpperTail(sumOfSquares / room, innermost.degrees);
 		}
-		return reached - confidence;
+		return reached;
 	};
 }
 
-/** Brackets outwards from a guess in steps that grow, then solves. */
-function solveFrom(excess: (x: number) => number, guess: number, firstStep: number): number {
-	const [lower, upper] = bracketIncreasing(excess, guess, firstStep);
-	return findRoot(excess, lower, upper, 1e-9);
+/** The stratum whose variance is least certain. */
+function widestOf(strata: readonly Stratum[]): Stratum {
+	return strata.reduce((a, b) => (deviationOf(b) > deviationOf(a) ? b : a));
 }
