@@ -10,7 +10,9 @@ function boxLine(box: Box): string {
 		case 'text':
 			return `text ${tag} ${place(box.x)} ${place(box.y)} ${box.pieces
 				.map(({ face, size, text }) => `${face} ${place(size)} “${text}”`)
-				.join(' + ')}${box.actual === undefined ? '' : ` reads ${box.actual}`}`;
+				.join(
+					' + '
+				)}${box.actual === undefined ? '' : ` reads ${box.actual}`}${box.link === undefined ? '' : ` leads to ${box.link}`}`;
 		case 'rule':
 			return `rule ${tag} ${box.from.map(place).join(' ')} ${box.to.map(place).join(' ')} weight ${box.weight}`;
 		case 'rectangle':
@@ -25,7 +27,7 @@ function boxLine(box: Box): string {
 }
 
 /** A laid-out datasheet as text that a person can compare: pages, boxes, tag tree, bookmarks. */
-export function printLayout({ paper, pages, structure, bookmarks }: LaidOut): string {
+export function printLayout({ paper, pages, structure, bookmarks, anchors }: LaidOut): string {
 	return [
 		`paper ${paper.name}`,
 		...pages.flatMap(({ boxes }, at) => [`page ${at + 1}`, ...boxes.map(boxLine)]),
@@ -35,6 +37,8 @@ export function printLayout({ paper, pages, structure, bookmarks }: LaidOut): st
 		),
 		'bookmarks',
 		...bookmarks.map(({ title, page, y }) => `${title}: page ${page + 1}, ${place(y)}`),
+		'places',
+		...[...anchors].map(([name, { page, y }]) => `${name}: page ${page + 1}, ${place(y)}`),
 		''
 	].join('\n');
 }

@@ -2,6 +2,7 @@ import { AFRelationship } from 'pdf-lib';
 import { canonicalBytes } from '../../core/datasheet/canonicalBytes';
 import { capacitanceTableCsv } from '../../core/datasheet/capacitanceTableCsv';
 import type { DatasheetDocument } from '../../core/datasheet/document';
+import { CAPACITANCE_TABLE } from './layout/sections/basisKey';
 
 /** A file that travels inside the PDF. */
 export interface EmbeddedFile {
@@ -11,18 +12,23 @@ export interface EmbeddedFile {
 	readonly mimeType: string;
 	readonly bytes: Uint8Array;
 	readonly relationship: AFRelationship;
+	/** Name of the place on the sheet that prints the same, for a link to it. */
+	readonly printedAt: string | null;
 }
 
 /** The document itself, and its capacitance tables as a spreadsheet can read them. */
 export function attachedFiles(document: DatasheetDocument): EmbeddedFile[] {
-	const hasTable = document.sections.some(({ kind }) => kind === 'capacitance-table');
+	const hasTable = document.sections.some(
+		(section) => section.kind === 'capacitance-table' && section.rows.length > 0
+	);
 	return [
 		{
 			name: 'datasheet.json',
 			holds: 'every value, with its basis',
 			mimeType: 'application/json',
 			bytes: canonicalBytes(document),
-			relationship: AFRelationship.Source
+			relationship: AFRelationship.Source,
+			printedAt: null
 		},
 		...(hasTable
 			? [
@@ -31,7 +37,8 @@ export function attachedFiles(document: DatasheetDocument): EmbeddedFile[] {
 						holds: 'capacitance at each bias',
 						mimeType: 'text/csv',
 						bytes: new TextEncoder().encode(capacitanceTableCsv(document)),
-						relationship: AFRelationship.Data
+						relationship: AFRelationship.Data,
+						printedAt: CAPACITANCE_TABLE
 					}
 				]
 			: [])

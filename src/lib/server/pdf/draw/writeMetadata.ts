@@ -62,14 +62,16 @@ interface XmpFacts {
 	readonly at: string;
 }
 
-/** The same facts as XMP (ISO 16684-1). */
+/** The same facts as XMP (ISO 16684-1), and what the file is built to (ISO 19005-3, 6.6.4). */
 function xmpPacket(facts: XmpFacts): string {
 	const alternative = (text: string) =>
 		`<rdf:Alt><rdf:li xml:lang="x-default">${escapeXml(text)}</rdf:li></rdf:Alt>`;
 	return `<?xpacket begin="\ufeff" id="W5M0MpCehiHzreSzNTczkc9d"?>
 <x:xmpmeta xmlns:x="adobe:ns:meta/">
 <rdf:RDF xmlns:rdf="http://www.w3.org/1999/02/22-rdf-syntax-ns#">
-<rdf:Description rdf:about="" xmlns:dc="http://purl.org/dc/elements/1.1/" xmlns:xmp="http://ns.adobe.com/xap/1.0/" xmlns:pdf="http://ns.adobe.com/pdf/1.3/">
+<rdf:Description rdf:about="" xmlns:dc="http://purl.org/dc/elements/1.1/" xmlns:xmp="http://ns.adobe.com/xap/1.0/" xmlns:pdf="http://ns.adobe.com/pdf/1.3/" xmlns:pdfaid="http://www.aiim.org/pdfa/ns/id/">
+<pdfaid:part>3</pdfaid:part>
+<pdfaid:conformance>B</pdfaid:conformance>
 <dc:format>application/pdf</dc:format>
 <dc:title>${alternative(facts.title)}</dc:title>
 <dc:description>${alternative(facts.subject)}</dc:description>

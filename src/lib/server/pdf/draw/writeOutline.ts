@@ -1,5 +1,6 @@
-import { PDFHexString, PDFName, PDFNull, type PDFContext, type PDFRef } from 'pdf-lib';
+import { PDFHexString, type PDFContext, type PDFRef } from 'pdf-lib';
 import type { LaidOut } from '../layout/layoutDatasheet';
+import { destination } from './writeLinks';
 
 /** Writes the bookmarks, one a section, and returns their root; `null` when there are none. */
 export function writeOutline(
@@ -14,13 +15,7 @@ export function writeOutline(
 		const [ref, previous, next] = [items[at], items[at - 1], items[at + 1]];
 		const page = pages[bookmark.page];
 		if (!ref || !page) return;
-		const target = context.obj([
-			page,
-			PDFName.of('XYZ'),
-			PDFNull,
-			Math.round(paper.height - bookmark.y + 6),
-			PDFNull
-		]);
+		const target = destination(context, page, bookmark, paper.height);
 		context.assign(
 			ref,
 			context.obj({

@@ -10,10 +10,13 @@ import {
 } from 'pdf-lib';
 import type { StructureNode } from '../layout/structure';
 import type { MarkedContent } from './PageWriter';
+import type { PageLink } from './writeLinks';
 
 export interface TaggedPage {
 	readonly ref: PDFRef;
 	readonly marked: readonly MarkedContent[];
+	/** In the order of their numbers, which go on after those of the pages. */
+	readonly links: readonly PageLink[];
 }
 
 /** Cells may be empty; anything else without content is left out of the tree. */
@@ -42,6 +45,7 @@ export function writeTags(
 ): PDFRef {
 	const content = contentByNode(pages);
 	const children = childrenByNode(nodes);
+	const links = linksByNode(pages);
 	const kept = keptNodes(nodes, children, content);
 	const positions = firstPositions(nodes, content);
 	const refs = nodes.map((_, at) => (kept.has(at) ? context.nextRef() : null));
@@ -63,6 +67,8 @@ export function writeTags(
 				kid: owner === ref ? reference(context, stretch, page) : owner
 			};
 		});
+		for (const { page: on, link } of links.get(at) ?? [])
+			kids.push({ position: Infinity, kid: context.obj({ Type: 'OBJR', Pg: on, Obj: link }) });
 		for (const child of children.get(at) ?? []) {
 			const kid = refs[child];
 			if (kid) kids.push({ position: positions.get(child) ?? 0, kid });
@@ -82,11 +88,15 @@ export function writeTags(
 		);
 	});
 
+	const allLinks = pages.flatMap((page) => page.links);
 	const parents = context.obj({
-		Nums: pages.flatMap(({ marked }, at) => [
-			at,
-			context.obj(marked.map(({ id }) => owners.get(at * PAGE_STEP + id) ?? root))
-		])
+		Nums: [
+			...pages.flatMap(({ marked }, at) => [
+				at,
+				context.obj(marked.map(({ id }) => owners.get(at * PAGE_STEP + id) ?? root))
+			]),
+			...allLinks.flatMap(({ node }, at) => [pages.length + at, refs[node] ?? root])
+		]
 	});
 	context.assign(
 		root,
@@ -94,7 +104,7 @@ export function writeTags(
 			Type: 'StructTreeRoot',
 			K: [refs[0] ?? root],
 			ParentTree: context.register(parents),
-			ParentTreeNextKey: pages.length
+			ParentTreeNextKey: pages.length + allLinks.length
 		})
 	);
 	return root;
@@ -115,6 +125,14 @@ const symbolSpan = (context: PDFContext, stretch: Stretch, parent: PDFRef): PDFR
 			ActualText: PDFHexString.fromText(stretch.actual ?? '')
 		})
 	);
+
+function linksByNode(pages: readonly TaggedPage[]) {
+	const links = new Map<number, { readonly page: PDFRef; readonly link: PDFRef }[]>();
+	for (const page of pages)
+		for (const { node, ref } of page.links)
+			links.set(node, [...(links.get(node) ?? []), { page: page.ref, link: ref }]);
+	return links;
+}
 
 function contentByNode(pages: readonly TaggedPage[]): Map<number, Stretch[]> {
 	const content = new Map<number, Stretch[]>();

@@ -30,6 +30,8 @@ export interface TextBox {
 	readonly pieces: readonly TextPiece[];
 	/** What copying gives, where it is not simply the letters: `V_R`. */
 	readonly actual?: string;
+	/** Name of the place in this document that it leads to. */
+	readonly link?: string;
 	readonly ink?: Ink;
 	/** Set downwards, letters' tops to the right: the draft's margin. */
 	readonly turned?: true;

@@ -1,5 +1,5 @@
 import { asArtifacts, moveBoxes, type Box, type RuleBox } from './box';
-import { stackHeight, type Block, type Part, type Row, type Section } from './flow';
+import { stackHeight, TERMS, type Block, type Part, type Row, type Section } from './flow';
 import { mm } from './paper';
 import { RULES } from './styles';
 
@@ -18,13 +18,17 @@ export interface ComposedPage {
 	end: number;
 }
 
+/** Where something begins: index of the page, and pt from its upper edge. */
+export interface PagePlace {
+	readonly page: number;
+	readonly y: number;
+}
+
 export interface Composition {
 	readonly pages: readonly ComposedPage[];
-	readonly bookmarks: readonly {
-		readonly title: string;
-		readonly page: number;
-		readonly y: number;
-	}[];
+	readonly bookmarks: readonly ({ readonly title: string } & PagePlace)[];
+	/** Places that links lead to, by name; of several the first. */
+	readonly anchors: ReadonlyMap<string, PagePlace>;
 }
 
 type Table = Extract<Part, { kind: 'table' }>;
@@ -36,13 +40,18 @@ type Table = Extract<Part, { kind: 'table' }>;
  */
 export function compose(sections: readonly Section[], limits: PageLimits): Composition {
 	const pages: ComposedPage[] = [{ boxes: [], end: limits.firstTop }];
-	const bookmarks: { title: string; page: number; y: number }[] = [];
+	const bookmarks: ({ title: string } & PagePlace)[] = [];
+	const anchors = new Map<string, PagePlace>();
 
 	const page = () => pages[pages.length - 1] ?? { boxes: [], end: 0 };
 	const bottom = () => (pages.length === 1 ? limits.firstBottom : limits.bottom);
 	const isFresh = () => pages.length > 1 && page().boxes.length === 0;
 	const fits = (height: number) => page().end + height <= bottom() + 0.01;
 	const turn = () => pages.push({ boxes: [], end: limits.top });
+	const here = (): PagePlace => ({ page: pages.length - 1, y: page().end });
+	const anchor = (name: string) => {
+		if (!anchors.has(name)) anchors.set(name, here());
+	};
 	const place = (block: Block) => {
 		page().boxes.push(...moveBoxes(block.boxes, limits.left, page().end));
 		page().end += block.height;
@@ -76,6 +85,7 @@ export function compose(sections: readonly Section[], limits: PageLimits): Compo
 			weight: RULES.table
 		});
 		const below = isEnd ? (table.terms ?? table.key) : table.key;
+		if (isEnd && table.terms) anchor(TERMS);
 		if (below) place(isEnd ? below : { ...below, boxes: asArtifacts(below.boxes) });
 	};
 
@@ -86,8 +96,8 @@ export function compose(sections: readonly Section[], limits: PageLimits): Compo
 		if (!isFresh() && !fits(gap + (isBreakable ? startHeight(section) : whole))) turn();
 		else page().end += gap;
 
-		if (section.title !== null)
-			bookmarks.push({ title: section.title, page: pages.length - 1, y: page().end });
+		if (section.title !== null) bookmarks.push({ title: section.title, ...here() });
+		if (section.anchor !== undefined) anchor(section.anchor);
 		if (section.head) place(section.head);
 		for (const part of section.parts) {
 			if (part.kind === 'table') placeTable(part, section);
@@ -97,7 +107,7 @@ export function compose(sections: readonly Section[], limits: PageLimits): Compo
 			}
 		}
 	}
-	return { pages, bookmarks };
+	return { pages, bookmarks, anchors };
 }
 
 /** Usual space between sections, on the first page and on the others. */

@@ -30,9 +30,14 @@ export type Part =
 			readonly terms: Block | null;
 	  };
 
+/** The place that marks lead to: where their terms stand in full. */
+export const TERMS = 'terms';
+
 export interface Section {
 	/** Name in the bookmarks; `null` for a part without a head. */
 	readonly title: string | null;
+	/** What links call it; nothing leads to a section without one. */
+	readonly anchor?: string;
 	/** In pt, or the usual space between sections, which is wider on the first page. */
 	readonly gapBefore: number | 'section';
 	readonly head: Block | null;

@@ -7,7 +7,7 @@ import { documentRows } from '../../../core/datasheet/documentRows';
 import type { PublicationRecord } from '../../../core/datasheet/record';
 import { arrange } from './arrange';
 import { moveBoxes, type Box } from './box';
-import { compose } from './compose';
+import { compose, type Composition } from './compose';
 import type { DrawnMark } from './drawnMark';
 import { runningFoot, runningHead } from './furniture';
 import { PAPERS, type Paper } from './paper';
@@ -21,11 +21,9 @@ export interface LaidOut {
 	readonly paper: Paper;
 	readonly pages: readonly { readonly boxes: readonly Box[] }[];
 	readonly structure: readonly StructureNode[];
-	readonly bookmarks: readonly {
-		readonly title: string;
-		readonly page: number;
-		readonly y: number;
-	}[];
+	readonly bookmarks: Composition['bookmarks'];
+	/** Where the links of text boxes lead. */
+	readonly anchors: Composition['anchors'];
 }
 
 /**
@@ -54,7 +52,7 @@ export function layoutDatasheet(
 	};
 	const notForRelease = isProof ? structure.add('P', structure.root) : null;
 	const sections = arrange(sheet, parts.attached);
-	const { pages, bookmarks } = compose(sections, {
+	const { pages, bookmarks, anchors } = compose(sections, {
 		left: paper.left,
 		top: paper.top,
 		bottom: paper.bottom,
@@ -66,6 +64,7 @@ export function layoutDatasheet(
 		paper,
 		structure: structure.nodes,
 		bookmarks,
+		anchors,
 		pages: pages.map((page, at) => ({
 			boxes: [
 				...proofMarks(document, record, paper, at === 0 ? notForRelease : null),

@@ -17,6 +17,7 @@ export type Role =
 	| 'Figure'
 	| 'Caption'
 	| 'Note'
+	| 'Link'
 	| 'Span';
 
 export interface NodeDetails {

@@ -40,7 +40,8 @@ const HEAD = { height: 12.5, baseline: 8.3 };
 export type Cell =
 	| { readonly kind: 'text'; readonly spans: readonly Span[] }
 	| { readonly kind: 'number'; readonly text: string | null; readonly mark?: TextPiece | null }
-	| { readonly kind: 'basis'; readonly basis: Basis | null }
+	/** A basis mark; with `leadsTo` a link to where its terms stand. */
+	| { readonly kind: 'basis'; readonly basis: Basis | null; readonly leadsTo?: string | undefined }
 	| { readonly kind: 'empty' }
 	/** Covered by the cell of a row above. */
 	| { readonly kind: 'covered' };
@@ -141,7 +142,7 @@ export function rowBlock(
 			const lines = breakLines(cell.spans, column.width - (column.indent ?? 0));
 			lineCount = Math.max(lineCount, lines.length);
 			boxes.push(...textBoxes(lines, column, tag));
-		} else boxes.push(...valueBoxes(cell, column, tag));
+		} else boxes.push(...valueBoxes(cell, column, tag, structure));
 	});
 
 	const height = ROW.height + (lineCount - 1) * STYLES.body.leading;
@@ -175,7 +176,8 @@ function textBoxes(lines: ReturnType<typeof breakLines>, column: Column, tag: Ta
 function valueBoxes(
 	cell: Extract<Cell, { kind: 'number' | 'basis' | 'empty' }>,
 	column: Column,
-	tag: Tag
+	tag: number,
+	structure: Structure
 ): Box[] {
 	switch (cell.kind) {
 		case 'empty':
@@ -183,7 +185,7 @@ function valueBoxes(
 		case 'basis':
 			return cell.basis === null
 				? []
-				: lineBoxes(oneLine([basisSpan(cell.basis)]), {
+				: lineBoxes(oneLine([basisCellSpan(cell.basis, cell.leadsTo, tag, structure)]), {
 						tag,
 						x: column.x + column.width / 2,
 						y: ROW.baseline,
@@ -194,6 +196,18 @@ function valueBoxes(
 		default:
 			return cell satisfies never;
 	}
+}
+
+function basisCellSpan(
+	basis: Basis,
+	leadsTo: string | undefined,
+	cell: number,
+	structure: Structure
+): Span {
+	const span = basisSpan(basis);
+	return leadsTo === undefined
+		? span
+		: { ...span, link: { to: leadsTo, tag: structure.add('Link', cell) } };
 }
 
 /** The basis letter; `typ` stands in the small running size. */

@@ -21,6 +21,8 @@ export interface Span {
 	readonly actual?: string;
 	/** Digits bound to a limit: a dotted underline on a proof. */
 	readonly isBound?: boolean;
+	/** Name of the place it leads to, and its node in the tag tree. */
+	readonly link?: { readonly to: string; readonly tag: number };
 }
 
 export interface Line {
@@ -77,6 +79,15 @@ export function symbolSpan(symbol: LetterSymbol, style: TextStyle): Span {
 		],
 		...(symbol.subscript !== undefined && { actual: symbolText(symbol) })
 	};
+}
+
+/** Words that lead to another place of the sheet; they stay together on a line. */
+export function linkSpan(
+	text: string,
+	style: TextStyle,
+	link: { readonly to: string; readonly tag: number }
+): Span {
+	return { ...textSpan(text.replaceAll(' ', '\u00a0'), style), link };
 }
 
 /** A mark at the shoulder of a number. */
@@ -136,7 +147,10 @@ function spaced(line: Line): Line {
 	const [only, ...more] = last?.pieces ?? [];
 	if (!last || !only) return line;
 	const trailing =
-		more.length === 0 && last.actual === undefined && last.isBound === undefined
+		more.length === 0 &&
+		last.actual === undefined &&
+		last.isBound === undefined &&
+		last.link === undefined
 			? { ...last, pieces: [repiece(only, `${only.text} `)] }
 			: null;
 	if (trailing) return { ...line, spans: [...line.spans.slice(0, -1), trailing] };
@@ -244,6 +258,7 @@ function canJoin(left: Span, right: Span): boolean {
 		left.actual === undefined &&
 		right.actual === undefined &&
 		(left.isBound ?? false) === (right.isBound ?? false) &&
+		left.link?.tag === right.link?.tag &&
 		a?.face === b?.face &&
 		a?.size === b?.size &&
 		a?.rise === b?.rise &&
@@ -268,11 +283,12 @@ export function lineBoxes(line: Line, place: LinePlace): Box[] {
 	return line.spans.flatMap((span): Box[] => [
 		{
 			kind: 'text',
-			tag: place.tag,
+			tag: span.link?.tag ?? place.tag,
 			x: left + span.x,
 			y: place.y,
 			pieces: span.pieces,
 			...(span.actual !== undefined && { actual: span.actual }),
+			...(span.link !== undefined && { link: span.link.to }),
 			...(place.ink !== undefined && { ink: place.ink })
 		},
 		...(span.isBound

@@ -6,7 +6,8 @@ import { MEASURE } from '../paper';
 import type { SectionOf, Sheet } from '../sheet';
 import { STYLES } from '../styles';
 import { changeBar } from '../table';
-import { breakLines, paragraphBoxes, richSpans, textSpan } from '../typeset';
+import { breakLines, linkSpan, paragraphBoxes, richSpans, textSpan, type Span } from '../typeset';
+import { CAPACITANCE_TABLE } from './basisKey';
 import { sectionHead } from './sectionHead';
 
 const CAPTION = { first: 9, below: 4.3 };
@@ -21,6 +22,7 @@ export function capacitanceChartSection(
 	const head = sectionHead(section.heading, section.conditions, { structure });
 	const marks = sheet.charts.get(section);
 	const leftOut = leftOutOfChart(section.points);
+	const captionTag = structure.add('Caption', structure.root);
 	const caption = breakLines(
 		[
 			textSpan(`Fig.\u00a0${place.figure}`, STYLES.captionBold),
@@ -35,12 +37,11 @@ export function capacitanceChartSection(
 					]
 				: leftOut === null
 					? []
-					: [textSpan(` ${leftOut}`, STYLES.caption)])
+					: leftOutSpans(leftOut, structure.add('Link', captionTag)))
 		],
 		MEASURE
 	);
 	const { leading } = STYLES.caption;
-	const captionTag = structure.add('Caption', structure.root);
 	const captionHeight = CAPTION.first + (caption.length - 1) * leading + CAPTION.below;
 	const boxes: Box[] = [
 		...paragraphBoxes(caption, { tag: captionTag, x: 0, y: CAPTION.first }, leading),
@@ -76,6 +77,17 @@ export function capacitanceChartSection(
 			}
 		]
 	};
+}
+
+/** The words of the left-out rows, of which *see the table* leads there. */
+function leftOutSpans(words: string, tag: number): Span[] {
+	const reference = 'see the table';
+	const [before = '', after = ''] = words.split(reference);
+	return [
+		textSpan(` ${before}`, STYLES.caption),
+		linkSpan(reference, STYLES.caption, { to: CAPACITANCE_TABLE, tag }),
+		textSpan(after, STYLES.caption)
+	];
 }
 
 function alternative(section: SectionOf<'capacitance-chart'>): string {

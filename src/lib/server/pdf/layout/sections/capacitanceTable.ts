@@ -16,7 +16,7 @@ import {
 	type Column
 } from '../table';
 import { lineBoxes, oneLine, richSpans, textSpan } from '../typeset';
-import { fullTerms, shortKey } from './basisKey';
+import { CAPACITANCE_TABLE, shortKey, termsBelow } from './basisKey';
 import { continuedHead, sectionHead } from './sectionHead';
 
 /** Two lines of heads: names of the spans, a rule beneath, the columns; in pt. */
@@ -91,8 +91,10 @@ export function capacitanceTable(section: SectionOf<'capacitance-table'>, sheet:
 			key === 'minimum' || key === 'maximum' ? limit : key === 'typical' ? typical : null;
 		return { kind: 'number', text: texts[key][at] ?? null, mark };
 	};
+	const { terms, elsewhere } = termsBelow(section, sheet);
 	return {
 		title: section.heading,
+		anchor: CAPACITANCE_TABLE,
 		gapBefore: 'section',
 		head,
 		continued: continuedHead(section.heading),
@@ -119,9 +121,9 @@ export function capacitanceTable(section: SectionOf<'capacitance-table'>, sheet:
 				key: shortKey(
 					sheet,
 					section.rows.map(({ basis }) => basis),
-					{ termsAreElsewhere: false }
+					elsewhere
 				),
-				terms: fullTerms(sheet)
+				terms
 			}
 		]
 	};

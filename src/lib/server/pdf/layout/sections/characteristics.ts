@@ -20,7 +20,7 @@ import {
 	type Column
 } from '../table';
 import { lineBoxes, oneLine, richSpans, symbolSpan } from '../typeset';
-import { fullTerms, hasCapacitanceTable, shortKey } from './basisKey';
+import { shortKey, termsBelow, termsLink } from './basisKey';
 import { continuedHead, sectionHead } from './sectionHead';
 
 const CONDITIONS_X = mm(73);
@@ -43,6 +43,7 @@ export function characteristics(section: SectionOf<'characteristics'>, sheet: Sh
 	};
 	const columns = numberColumns({ name: 'Characteristic', typical: 'Typ', basis: 'Basis' }, texts);
 	const heads = headBlock(columns, { structure, table });
+	const leadsTo = termsLink(section, sheet);
 	const rows = families(section.rows).flatMap((family, at, all) => {
 		const isNewTemperature = all[at - 1]?.temperature !== family.temperature;
 		return [
@@ -57,12 +58,13 @@ export function characteristics(section: SectionOf<'characteristics'>, sheet: Sh
 					},
 					place: inFamily,
 					familySize: family.rows.length,
-					isFirstOfGroup: isNewTemperature && inFamily === 0
+					isFirstOfGroup: isNewTemperature && inFamily === 0,
+					leadsTo
 				})
 			)
 		];
 	});
-	const termsAreElsewhere = hasCapacitanceTable(sheet.document);
+	const { terms, elsewhere } = termsBelow(section, sheet);
 	return {
 		title: section.heading,
 		gapBefore: 'section',
@@ -77,9 +79,9 @@ export function characteristics(section: SectionOf<'characteristics'>, sheet: Sh
 				key: shortKey(
 					sheet,
 					section.rows.map(({ basis }) => basis),
-					{ termsAreElsewhere }
+					elsewhere
 				),
-				terms: termsAreElsewhere ? null : fullTerms(sheet)
+				terms
 			}
 		]
 	};
@@ -125,6 +127,7 @@ interface RowPlace {
 	readonly place: number;
 	readonly familySize: number;
 	readonly isFirstOfGroup: boolean;
+	readonly leadsTo: string | undefined;
 }
 
 function characteristicRow(
@@ -150,7 +153,7 @@ function characteristicRow(
 				: { kind: 'number', text: place.texts.typical, mark: statusMark(sheet, 'typical') },
 			{ kind: 'number', text: place.texts.maximum, mark: limitMark },
 			textCell(row.unit, STYLES.body),
-			{ kind: 'basis', basis: row.basis }
+			{ kind: 'basis', basis: row.basis, leadsTo: place.leadsTo }
 		],
 		{
 			structure: sheet.structure,

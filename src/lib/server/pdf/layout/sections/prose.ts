@@ -4,7 +4,15 @@ import { GUTTER, mm, THIRD } from '../paper';
 import type { SectionOf, Sheet } from '../sheet';
 import { STYLES } from '../styles';
 import { changeBar } from '../table';
-import { breakLines, lineBoxes, oneLine, paragraphBoxes, richSpans, textSpan } from '../typeset';
+import {
+	breakLines,
+	lineBoxes,
+	linkSpan,
+	oneLine,
+	paragraphBoxes,
+	richSpans,
+	textSpan
+} from '../typeset';
 import { sectionHead } from './sectionHead';
 
 const PARAGRAPH_WIDTH = mm(114);
@@ -19,6 +27,8 @@ const BETWEEN_ITEMS = 1.4;
 export interface AttachedFile {
 	readonly name: string;
 	readonly holds: string;
+	/** Name of the place on the sheet that prints the same. */
+	readonly printedAt: string | null;
 }
 
 /** A paragraph across two thirds of the measure; the attached files are named beside the first one. */
@@ -57,15 +67,21 @@ function asideBoxes(attached: readonly AttachedFile[], sheet: Sheet, first: numb
 	if (attached.length === 0) return { boxes: [], end: 0 };
 	const { structure } = sheet;
 	const { leading } = STYLES.aside;
-	const paragraphs = [
-		[oneLine([textSpan('Attached to this file', STYLES.asideHead)])],
-		...attached.map(({ name, holds }) =>
-			breakLines([textSpan(`${name}: ${holds}`, STYLES.aside)], THIRD)
-		)
-	];
-	let y = first;
-	const boxes = paragraphs.flatMap((lines) => {
+	const head = {
+		tag: structure.add('P', structure.root),
+		spans: [textSpan('Attached to this file', STYLES.asideHead)]
+	};
+	const files = attached.map(({ name, holds, printedAt }) => {
 		const tag = structure.add('P', structure.root);
+		const named =
+			printedAt === null
+				? textSpan(name, STYLES.aside)
+				: linkSpan(name, STYLES.aside, { to: printedAt, tag: structure.add('Link', tag) });
+		return { tag, spans: [named, textSpan(`: ${holds}`, STYLES.aside)] };
+	});
+	let y = first;
+	const boxes = [head, ...files].flatMap(({ tag, spans }) => {
+		const lines = breakLines(spans, THIRD);
 		const placed = paragraphBoxes(lines, { tag, x: ASIDE_X, y }, leading);
 		y += lines.length * leading;
 		return placed;

@@ -59,7 +59,7 @@ export function ratings(section: SectionOf<'ratings'>, sheet: Sheet): Section {
 						}
 					);
 				}),
-				key: shortKey(sheet, [], { termsAreElsewhere: false }),
+				key: shortKey(sheet, [], null),
 				terms: null
 			}
 		]
