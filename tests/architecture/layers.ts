@@ -18,6 +18,7 @@ export const CORE_ORDER = [
 	'junction',
 	'distributions',
 	'limits',
+	'outline',
 	'template',
 	'datasheet',
 	'review'
