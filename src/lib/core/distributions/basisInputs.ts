@@ -1,5 +1,5 @@
 /** Raised when distributions of the same devices come out differently than before. */
-export const DISTRIBUTION_VERSION = 'distributions-1';
+export const DISTRIBUTION_VERSION = 'distributions-2';
 
 export interface BasisSet {
 	readonly id: number;

@@ -1,10 +1,15 @@
 import { mean as meanOf } from '../stats/mean';
 import { quantile } from '../stats/quantile';
 import { skewness } from '../stats/skewness';
+import { censoringOf } from './censorReadings';
+import { componentsOf } from './componentsOf';
 import { TransformDomainError } from './errors';
+import { extremesOf } from './extremes';
+import { groupMembers, type Members } from './groupMembers';
 import type { GroupName } from './indexDevices';
-import type { Distribution, Group, Transform } from './summary';
+import type { Censoring, Distribution, DistributionSummary, Group, Transform } from './summary';
 import { TRANSFORMS } from './transforms';
+import { withinLotNormality } from './withinLotNormality';
 
 /** Where the stored quantiles lie: the extremes, the tails a limit speaks of, and every 5 %. */
 export const STORED_PROBABILITIES: readonly number[] = [
@@ -20,6 +25,8 @@ export interface DistributionInput {
 	readonly transform: Transform;
 	/** One value a device in SI units; NaN for a device without one. */
 	readonly values: Float64Array;
+	/** What each value says: at most (−1), exactly (0), at least (1). Without it all are exact. */
+	readonly censored?: Int8Array;
 	/** The group of each device, an index into `groups`. */
 	readonly groupOf: Int32Array;
 	readonly groups: readonly GroupName[];
@@ -27,29 +34,42 @@ export interface DistributionInput {
 	readonly uncertainty: number | null;
 	readonly excluded: number;
 	readonly quarantined: number;
+	/** Whether the bias lies between measured ones. Default: false. */
+	readonly interpolated?: boolean;
 }
 
 /**
  * Sums up a characteristic at one condition: y is the transformed value; mean and spread in total,
  * and n, mean and Σ(y − mean)² of each lot and wafer, from which every limit that rests on
- * normality is arithmetic. The spread is divided by n − 1.
+ * normality is arithmetic; the outermost devices, from which order statistics are. The spread is
+ * divided by n − 1.
+ *
+ * Censored devices count in n, lots, quantiles and extremes, where they stand at their bound. Mean,
+ * spread and groups are those of the observed devices. When none was observed, the mean is that of
+ * the bounds, the spread 0, and there are no groups.
  *
  * Values are sorted before they are added, so the result is the same to the last bit in whatever
  * order devices and sets come.
  *
  * @returns `undefined` when no device has a value
  * @throws {TransformDomainError} for a value whose logarithm does not exist
+ * @throws {CensoringError} when readings are censored below a floor that is not below the ceiling
  */
 export function computeDistribution(input: DistributionInput): Distribution | undefined {
-	const { transform, values } = input;
-	const sorted = presentValues(values).sort();
+	const { transform, values, censored } = input;
+	const censoring = censored && censoringOf({ values, censored });
+	const bounded = withinBounds(values, censoring);
+	const sorted = bounded.filter((value) => !Number.isNaN(value)).sort();
 	if (sorted.length === 0) return undefined;
 	const lowest = sorted[0] ?? Number.NaN;
 	if (transform !== 'identity' && lowest <= 0) throw new TransformDomainError(transform, lowest);
 
-	const groups = summarizeGroups(input);
-	const sampleSize = sorted.length;
-	const transformed = sorted.map(TRANSFORMS[transform].apply);
+	const { apply } = TRANSFORMS[transform];
+	const observed = observedOf(sorted, censoring);
+	const all = groupMembers(bounded, input.groupOf, input.groups);
+	const members = censoring ? all.flatMap((of) => observedMembers(of, censoring)) : all;
+	const groups = members.map((of) => sumsOf(of, apply));
+	const transformed = (observed.length === 0 ? sorted : observed).map(apply);
 	const mean = meanOf(transformed);
 	const sumOfSquares = sum(
 		groups.map((of) => of.sumOfSquares + of.sampleSize * (of.mean - mean) ** 2)
@@ -60,65 +80,84 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 		conditionKey: input.conditionKey,
 		unit: input.unit,
 		transform,
-		sampleSize,
-		independentLots: new Set(groups.map((of) => of.waferLot)).size,
-		wafers: groups.length,
+		sampleSize: sorted.length,
+		independentLots: new Set(all.map(({ name }) => name.waferLot)).size,
+		wafers: all.length,
 		mean,
-		standardDeviation: sampleSize > 1 ? Math.sqrt(sumOfSquares / (sampleSize - 1)) : 0,
+		standardDeviation: observed.length > 1 ? Math.sqrt(sumOfSquares / (observed.length - 1)) : 0,
 		// Two devices can't lean to a side.
-		skewness: sampleSize < 3 ? 0 : skewness(transformed),
-		quantiles: STORED_PROBABILITIES.map((probability) => ({
-			probability,
-			value: quantile(sorted, probability)
-		})),
-		interpolated: false,
+		skewness: observed.length < 3 ? 0 : skewness(transformed),
+		quantiles: quantilesOf(sorted, censoring),
+		interpolated: input.interpolated ?? false,
 		sets: [...input.sets],
 		uncertainty: input.uncertainty,
 		excluded: input.excluded,
 		quarantined: input.quarantined,
-		groups
+		origin: 'measured',
+		...(censoring && { censoring }),
+		normality: censoring ? null : withinLotNormality(members, apply),
+		components: censoring ? null : componentsOf(groups),
+		groups,
+		extremes: extremesOf(sorted)
 	};
 }
 
-function presentValues(values: Float64Array): Float64Array {
-	return values.filter((value) => !Number.isNaN(value));
+/** Every device beyond a bound stands at the bound. */
+function withinBounds(values: Float64Array, censoring: Censoring | undefined): Float64Array {
+	if (censoring === undefined) return values;
+	const { floor, ceiling } = censoring;
+	return values.map((value) => Math.min(Math.max(value, floor ?? -Infinity), ceiling ?? Infinity));
 }
 
-/** Two passes within each group: the mean first, then the squares around it. */
-function summarizeGroups({ values, groupOf, groups, transform }: DistributionInput): Group[] {
-	const sizes = new Int32Array(groups.length);
-	for (const [device, value] of values.entries()) {
-		if (!Number.isNaN(value)) sizes[groupOf[device] ?? -1]! += 1;
-	}
-	const members = groups.map((_, group) => new Float64Array(sizes[group] ?? 0));
-	const filled = new Int32Array(groups.length);
-	for (const [device, value] of values.entries()) {
-		if (Number.isNaN(value)) continue;
-		const group = groupOf[device] ?? -1;
-		members[group]![filled[group]!++] = value;
-	}
+/** The devices between the bounds. @param sorted ascending */
+function observedOf(sorted: Float64Array, censoring: Censoring | undefined): Float64Array {
+	if (censoring === undefined) return sorted;
+	return sorted.subarray(censoring.atOrBelow, sorted.length - censoring.atOrAbove);
+}
 
-	const { apply } = TRANSFORMS[transform];
-	return groups.flatMap((name, group) => {
-		const sorted = members[group]?.sort() ?? new Float64Array();
-		const [lowest] = sorted;
-		const highest = sorted.at(-1);
-		if (lowest === undefined || highest === undefined) return [];
-		const transformed = sorted.map(apply);
-		const mean = meanOf(transformed);
-		return [
-			{
-				lot: name.lot,
-				waferLot: name.waferLot,
-				wafer: name.wafer,
-				sampleSize: transformed.length,
-				mean,
-				sumOfSquares: sum(transformed.map((y) => (y - mean) ** 2)),
-				lowest,
-				highest
-			}
-		];
-	});
+function observedMembers({ name, sorted }: Members, { floor, ceiling }: Censoring): Members[] {
+	const observed = sorted.filter(
+		(value) => value > (floor ?? -Infinity) && value < (ceiling ?? Infinity)
+	);
+	return observed.length === 0 ? [] : [{ name, sorted: observed }];
+}
+
+/** Two passes: the mean first, then the squares around it. */
+function sumsOf({ name, sorted }: Members, apply: (value: number) => number): Group {
+	const transformed = sorted.map(apply);
+	const mean = meanOf(transformed);
+	return {
+		lot: name.lot,
+		waferLot: name.waferLot,
+		wafer: name.wafer,
+		sampleSize: transformed.length,
+		mean,
+		sumOfSquares: sum(transformed.map((y) => (y - mean) ** 2)),
+		lowest: sorted[0] ?? Number.NaN,
+		highest: sorted.at(-1) ?? Number.NaN
+	};
+}
+
+function quantilesOf(
+	sorted: Float64Array,
+	censoring: Censoring | undefined
+): DistributionSummary['quantiles'] {
+	if (censoring === undefined) {
+		return STORED_PROBABILITIES.map((probability) => ({
+			probability,
+			value: quantile(sorted, probability)
+		}));
+	}
+	// The weight of censored devices in a quantile is the same quantile of "is censored".
+	const { atOrBelow, atOrAbove } = censoring;
+	const below = sorted.map((_, rank) => (rank < atOrBelow ? 1 : 0));
+	const above = sorted.map((_, rank) => (rank < sorted.length - atOrAbove ? 0 : 1));
+	return STORED_PROBABILITIES.map((probability) => ({
+		probability,
+		value: quantile(sorted, probability),
+		...(quantile(below, probability) > 0 && { bound: 'atMost' as const }),
+		...(quantile(above, probability) > 0 && { bound: 'atLeast' as const })
+	}));
 }
 
 function sum(numbers: ArrayLike<number> & Iterable<number>): number {

@@ -18,3 +18,25 @@ export class PackedGroupsError extends Error {
 		super(`packed groups require ${requirement}`);
 	}
 }
+
+/** A floor that is not below the ceiling: every reading would be censored on both sides. */
+export class CensoringError extends Error {
+	override readonly name = 'CensoringError';
+	constructor(
+		readonly floor: number,
+		readonly ceiling: number
+	) {
+		super(`censoring requires a floor below the ceiling, got ${floor} and ${ceiling}`);
+	}
+}
+
+/** A summary that no sample can have. */
+export class EnteredDistributionError extends Error {
+	override readonly name = 'EnteredDistributionError';
+	constructor(
+		readonly requirement: string,
+		readonly actual: number
+	) {
+		super(`an entered distribution requires ${requirement}, got ${actual}`);
+	}
+}

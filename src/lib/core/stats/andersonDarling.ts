@@ -1,6 +1,6 @@
 import { SampleTooSmallError, OutsideDomainError } from './errors';
+import { logNormalLowerTail } from './logNormalTail';
 import { mean } from './mean';
-import { normalLowerTail, normalUpperTail } from './normalDistribution';
 import { standardDeviation } from './standardDeviation';
 
 export interface AndersonDarling {
@@ -46,7 +46,7 @@ export function andersonDarling(values: ArrayLike<number>): AndersonDarling {
 	const z = Float64Array.from(values, (value) => (value - centre) / deviation).sort();
 	let sum = 0;
 	for (let i = 0; i < count; i++) {
-		const logs = Math.log(normalLowerTail(z[i]!)) + Math.log(normalUpperTail(z[count - 1 - i]!));
+		const logs = logNormalLowerTail(z[i]!) + logNormalLowerTail(-z[count - 1 - i]!);
 		sum += (2 * i + 1) * logs;
 	}
 	const statistic = -count - sum / count;

@@ -1,14 +1,33 @@
+import { groupBy } from '../groupBy';
 import { NoSolutionError, OutsideDomainError, SampleTooSmallError } from './errors';
 import { bracketIncreasing, findRoot } from './findRoot';
-import { normalDensity, normalLowerTail } from './normalDistribution';
+import { groupSums } from './groupSums';
+import { logNormalLowerTail, normalHazard } from './logNormalTail';
 import { normalQuantile } from './normalQuantile';
 import { oneSidedToleranceFactor, type TolerancePromise } from './toleranceFactor';
+import type { GroupSums } from './varianceComponents';
 
 /** Readings of which some only say "at most" (left) or "at least" (right). */
 export interface CensoredSample {
 	readonly exact: readonly number[];
 	readonly atMost: readonly number[];
 	readonly atLeast: readonly number[];
+}
+
+/** So many readings that only say they lie on one side of a bound. */
+export interface CensoredCount {
+	readonly count: number;
+	readonly bound: number;
+}
+
+/**
+ * All that the likelihood of a censored sample depends on: sums of the readings that carry numbers,
+ * and counts of the others. Enough where the readings themselves are no longer at hand.
+ */
+export interface CensoredSums {
+	readonly observed: GroupSums;
+	readonly atMost: readonly CensoredCount[];
+	readonly atLeast: readonly CensoredCount[];
 }
 
 export interface CensoredFit {
@@ -18,77 +37,90 @@ export interface CensoredFit {
 }
 
 const FEWEST_EXACT = 3;
+const LOG_SQRT_TWO_PI = 0.9189385332046727;
 
-/** φ/Φ, the slope of ln Φ, without dividing zero by zero far below. */
-const hazard = (z: number) => (z > -37 ? normalDensity(z) / normalLowerTail(z) : -z);
-const logTail = (z: number) =>
-	z > -37 ? Math.log(normalLowerTail(z)) : -(z * z) / 2 - Math.log(-z) - 0.9189385332046727;
-
-/** The log-likelihood in Olsen's parameters θ = 1/σ and η = μ/σ, in which it is concave. */
-function logLikelihood(
-	{ exact, atMost, atLeast }: CensoredSample,
-	theta: number,
-	eta: number
-): number {
-	let sum = exact.length * (Math.log(theta) - 0.9189385332046727);
-	for (const y of exact) sum -= (theta * y - eta) ** 2 / 2;
-	for (const y of atMost) sum += logTail(theta * y - eta);
-	for (const y of atLeast) sum += logTail(eta - theta * y);
-	return sum;
-}
-
-/** Centre and scale that make the readings tame numbers. */
-function standardization({ exact }: CensoredSample) {
-	const centre = exact.reduce((sum, y) => sum + y, 0) / exact.length;
-	const squares = exact.reduce((sum, y) => sum + (y - centre) ** 2, 0);
-	return { centre, scale: Math.sqrt(squares / exact.length) };
-}
-
-function standardized(sample: CensoredSample, centre: number, scale: number): CensoredSample {
-	const convert = (values: readonly number[]) => values.map((y) => (y - centre) / scale);
+function sumsOf({ exact, atMost, atLeast }: CensoredSample): CensoredSums {
+	const [first] = exact;
+	const sums = first === undefined ? { sampleSize: 0, mean: 0, sumOfSquares: 0 } : groupSums(exact);
+	const isStill = exact.every((y) => y === first);
 	return {
-		exact: convert(sample.exact),
-		atMost: convert(sample.atMost),
-		atLeast: convert(sample.atLeast)
+		observed: isStill ? { ...sums, sumOfSquares: 0 } : sums,
+		atMost: countsOf(atMost),
+		atLeast: countsOf(atLeast)
 	};
 }
 
-function check(statistic: string, sample: CensoredSample): void {
-	if (sample.exact.length < FEWEST_EXACT)
-		throw new SampleTooSmallError(
-			`${statistic} (readings not censored)`,
-			FEWEST_EXACT,
-			sample.exact.length
-		);
-	const [first] = sample.exact;
-	if (sample.exact.every((y) => y === first))
-		throw new OutsideDomainError(statistic, 'a spread of the readings not censored', 0);
+const countsOf = (bounds: readonly number[]): CensoredCount[] =>
+	[...groupBy(bounds, (bound) => bound)].map(([bound, all]) => ({ bound, count: all.length }));
+
+/** The other way round: what was at most is at least. */
+const mirrored = ({ observed, atMost, atLeast }: CensoredSums): CensoredSums => ({
+	observed: { ...observed, mean: -observed.mean },
+	atMost: atLeast.map(({ count, bound }) => ({ count, bound: -bound })),
+	atLeast: atMost.map(({ count, bound }) => ({ count, bound: -bound }))
+});
+
+/** Sums in units in which the observed readings have mean 0 and Σ y² = n. */
+interface Standardized {
+	readonly count: number;
+	readonly atMost: readonly CensoredCount[];
+	readonly atLeast: readonly CensoredCount[];
+	readonly centre: number;
+	readonly scale: number;
 }
 
-/** Maximum of the likelihood of standardized readings, by Newton steps that are cut when they overshoot. */
-function maximize(sample: CensoredSample): { theta: number; eta: number; value: number } {
+/**
+ * @throws {SampleTooSmallError} for fewer than three observed readings
+ * @throws {OutsideDomainError} when those do not vary
+ */
+function standardize(statistic: string, { observed, atMost, atLeast }: CensoredSums): Standardized {
+	const { sampleSize, mean: centre, sumOfSquares } = observed;
+	if (sampleSize < FEWEST_EXACT)
+		throw new SampleTooSmallError(`${statistic} (readings not censored)`, FEWEST_EXACT, sampleSize);
+	if (!(sumOfSquares > 0))
+		throw new OutsideDomainError(statistic, 'a spread of the readings not censored', 0);
+	const scale = Math.sqrt(sumOfSquares / sampleSize);
+	const convert = (counts: readonly CensoredCount[]) =>
+		counts.map(({ count, bound }) => ({ count, bound: (bound - centre) / scale }));
+	return { count: sampleSize, atMost: convert(atMost), atLeast: convert(atLeast), centre, scale };
+}
+
+/** The log-likelihood in Olsen's parameters θ = 1/σ and η = μ/σ, in which it is concave. */
+function logLikelihood(
+	{ count, atMost, atLeast }: Standardized,
+	theta: number,
+	eta: number
+): number {
+	let sum = count * (Math.log(theta) - LOG_SQRT_TWO_PI - (theta * theta + eta * eta) / 2);
+	for (const at of atMost) sum += at.count * logNormalLowerTail(theta * at.bound - eta);
+	for (const at of atLeast) sum += at.count * logNormalLowerTail(eta - theta * at.bound);
+	return sum;
+}
+
+/** Maximum of the likelihood, by Newton steps that are cut when they overshoot. */
+function maximize(sample: Standardized): { theta: number; eta: number; value: number } {
+	const { count } = sample;
 	let [theta, eta] = [1, 0];
 	let value = logLikelihood(sample, theta, eta);
 	for (let round = 0; round < 100; round++) {
-		let [gt, ge] = [sample.exact.length / theta, 0];
-		let [tt, te, ee] = [-sample.exact.length / theta ** 2, 0, 0];
-		const add = (y: number, slope: number, curvature: number) => {
-			gt += slope * y;
-			ge -= slope;
-			tt += curvature * y * y;
-			te -= curvature * y;
-			ee += curvature;
+		let [gt, ge] = [count / theta - theta * count, -eta * count];
+		let [tt, te, ee] = [-count / theta ** 2 - count, 0, -count];
+		const add = (at: CensoredCount, slope: number, curvature: number) => {
+			gt += at.count * slope * at.bound;
+			ge -= at.count * slope;
+			tt += at.count * curvature * at.bound * at.bound;
+			te -= at.count * curvature * at.bound;
+			ee += at.count * curvature;
 		};
-		for (const y of sample.exact) add(y, -(theta * y - eta), -1);
-		for (const y of sample.atMost) {
-			const z = theta * y - eta;
-			const h = hazard(z);
-			add(y, h, -h * (z + h));
+		for (const at of sample.atMost) {
+			const z = theta * at.bound - eta;
+			const h = normalHazard(z);
+			add(at, h, -h * (z + h));
 		}
-		for (const y of sample.atLeast) {
-			const z = eta - theta * y;
-			const h = hazard(z);
-			add(y, -h, -h * (z + h));
+		for (const at of sample.atLeast) {
+			const z = eta - theta * at.bound;
+			const h = normalHazard(z);
+			add(at, -h, -h * (z + h));
 		}
 		const determinant = tt * ee - te * te;
 		const stepTheta = -(ee * gt - te * ge) / determinant;
@@ -120,25 +152,31 @@ function maximize(sample: CensoredSample): { theta: number; eta: number; value: 
  * @throws {OutsideDomainError} when those do not vary
  */
 export function censoredNormalFit(sample: CensoredSample): CensoredFit {
-	check('censoredNormalFit', sample);
-	const { centre, scale } = standardization(sample);
-	const { theta, eta, value } = maximize(standardized(sample, centre, scale));
+	return censoredFitOfSums(sumsOf(sample));
+}
+
+/** {@link censoredNormalFit} from sums. */
+export function censoredFitOfSums(sums: CensoredSums): CensoredFit {
+	const tame = standardize('censoredNormalFit', sums);
+	const { theta, eta, value } = maximize(tame);
 	return {
-		mean: centre + (scale * eta) / theta,
-		standardDeviation: scale / theta,
-		logLikelihood: value - sample.exact.length * Math.log(scale)
+		mean: tame.centre + (tame.scale * eta) / theta,
+		standardDeviation: tame.scale / theta,
+		logLikelihood: value - tame.count * Math.log(tame.scale)
 	};
 }
 
 /** Best likelihood when the P-quantile is held at x: one parameter is left, and its slope is monotone. */
-function profile(sample: CensoredSample, x: number, z: number): number {
+function profile(sample: Standardized, x: number, z: number): number {
 	const slope = (logTheta: number) => {
 		const theta = Math.exp(logTheta);
 		const eta = x * theta - z;
-		let sum = sample.exact.length / theta;
-		for (const y of sample.exact) sum -= (theta * y - eta) * (y - x);
-		for (const y of sample.atMost) sum += hazard(theta * y - eta) * (y - x);
-		for (const y of sample.atLeast) sum += hazard(eta - theta * y) * (x - y);
+		// Σ (θy − η)(y − x) over the observed, whose mean is 0 and mean square 1.
+		let sum = sample.count * (1 / theta - theta - eta * x);
+		for (const { count, bound } of sample.atMost)
+			sum += count * normalHazard(theta * bound - eta) * (bound - x);
+		for (const { count, bound } of sample.atLeast)
+			sum += count * normalHazard(eta - theta * bound) * (x - bound);
 		return -sum;
 	};
 	const [lower, upper] = bracketIncreasing(slope, 0, 0.5);
@@ -167,26 +205,29 @@ function exactThreshold(sampleSize: number, promise: TolerancePromise): number {
  * @throws {OutsideDomainError} when those do not vary
  */
 export function censoredMaximum(sample: CensoredSample, promise: TolerancePromise): number {
-	check('censoredMaximum', sample);
-	const threshold = exactThreshold(sample.exact.length, promise);
+	return censoredMaximumOfSums(sumsOf(sample), promise);
+}
+
+/** {@link censoredMaximum} from sums. */
+export function censoredMaximumOfSums(sums: CensoredSums, promise: TolerancePromise): number {
+	const tame = standardize('censoredMaximum', sums);
+	const threshold = exactThreshold(tame.count, promise);
 	const z = normalQuantile(promise.content);
-	const { centre, scale } = standardization(sample);
-	const tame = standardized(sample, centre, scale);
 	const { theta, eta, value } = maximize(tame);
 	const best = (eta + z) / theta;
 	const excess = (x: number) => 2 * (value - profile(tame, x, z)) - threshold;
 	let lower = best;
 	let upper = best + 1 / theta;
 	for (let step = 2 / theta; excess(upper) < 0; step *= 2) [lower, upper] = [upper, upper + step];
-	return centre + scale * findRoot(excess, lower, upper, 1e-11);
+	return tame.centre + tame.scale * findRoot(excess, lower, upper, 1e-11);
 }
 
 /** A minimum below the content of a normal population; see {@link censoredMaximum}. */
 export function censoredMinimum(sample: CensoredSample, promise: TolerancePromise): number {
-	const mirrored = {
-		exact: sample.exact.map((y) => -y),
-		atMost: sample.atLeast.map((y) => -y),
-		atLeast: sample.atMost.map((y) => -y)
-	};
-	return -censoredMaximum(mirrored, promise);
+	return censoredMinimumOfSums(sumsOf(sample), promise);
+}
+
+/** {@link censoredMinimum} from sums. */
+export function censoredMinimumOfSums(sums: CensoredSums, promise: TolerancePromise): number {
+	return -censoredMaximumOfSums(mirrored(sums), promise);
 }

@@ -26,7 +26,5 @@ export async function findDistribution(
 			)
 		)
 		.limit(1);
-	return (
-		found && { ...distributionSummary.parse(found.summary), groups: unpackGroups(found.groups) }
-	);
+	return found && { ...distributionSummary.parse(found.summary), ...unpackGroups(found.groups) };
 }

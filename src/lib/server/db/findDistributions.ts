@@ -37,7 +37,7 @@ export async function findDistributions(
 			condition: readConditionKey(row.conditionKey),
 			distribution: {
 				...distributionSummary.parse(row.summary),
-				groups: unpackGroups(row.groups)
+				...unpackGroups(row.groups)
 			}
 		}))
 		.sort((a, b) => (a.condition.reverseVoltage ?? 0) - (b.condition.reverseVoltage ?? 0));

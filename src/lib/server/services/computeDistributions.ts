@@ -72,14 +72,14 @@ async function storeDistributions(
 		const distributions = await distributionsAt(db, basis, devices, condition);
 		for (let first = 0; first < distributions.length; first += ROWS_A_WRITE) {
 			const rows = distributions.slice(first, first + ROWS_A_WRITE).map((of) => {
-				const { groups, ...summary } = of;
+				const { groups, extremes, ...summary } = of;
 				return {
 					product: productId,
 					characteristic: of.characteristic,
 					conditionKey: of.conditionKey,
 					basisHash: basis.hash,
 					summary,
-					groups: Buffer.from(packGroups(groups))
+					groups: Buffer.from(packGroups({ groups, extremes }))
 				};
 			});
 			await write(db, (tx) => tx.insert(distribution).values(rows).onConflictDoNothing());

@@ -1,0 +1,33 @@
+import type { GroupName } from './indexDevices';
+
+/** The devices that share a lot and wafer, their values ascending. */
+export interface Members {
+	readonly name: GroupName;
+	readonly sorted: Float64Array;
+}
+
+/**
+ * Sorts values by the group of their device; values that are NaN and groups without any are left
+ * out. Ascending order makes every sum over them the same in whatever order devices come.
+ */
+export function groupMembers(
+	values: Float64Array,
+	groupOf: Int32Array,
+	groups: readonly GroupName[]
+): Members[] {
+	const sizes = new Int32Array(groups.length);
+	for (const [device, value] of values.entries()) {
+		if (!Number.isNaN(value)) sizes[groupOf[device] ?? -1]! += 1;
+	}
+	const members = groups.map((_, group) => new Float64Array(sizes[group] ?? 0));
+	const filled = new Int32Array(groups.length);
+	for (const [device, value] of values.entries()) {
+		if (Number.isNaN(value)) continue;
+		const group = groupOf[device] ?? -1;
+		members[group]![filled[group]!++] = value;
+	}
+	return groups.flatMap((name, group) => {
+		const sorted = members[group]?.sort() ?? new Float64Array();
+		return sorted.length === 0 ? [] : [{ name, sorted }];
+	});
+}
