@@ -40,3 +40,11 @@ export class EnteredDistributionError extends Error {
 		super(`an entered distribution requires ${requirement}, got ${actual}`);
 	}
 }
+
+/** Stored bytes are not what `packJoint` writes. */
+export class PackedJointError extends Error {
+	override readonly name = 'PackedJointError';
+	constructor(readonly requirement: string) {
+		super(`a packed joint distribution requires ${requirement}`);
+	}
+}

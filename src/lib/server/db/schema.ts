@@ -306,7 +306,7 @@ export const distribution = sqliteTable(
 		basisHash: text().notNull(),
 		/** `distributionSummary` of core, without its groups. */
 		summary: text({ mode: 'json' }).notNull(),
-		/** Per lot and wafer n, mean and sum of squares, packed by `packGroups` of core. */
+		/** Per lot and wafer n, mean and sum of squares, and the outermost devices: `packGroups`. */
 		groups: blob({ mode: 'buffer' }).notNull()
 	},
 	(table) => [
@@ -317,6 +317,59 @@ export const distribution = sqliteTable(
 			table.basisHash
 		)
 	]
+);
+
+/** How the measured biases of a temperature and frequency vary together. */
+export const jointDistribution = sqliteTable(
+	'joint_distribution',
+	{
+		id: integer().primaryKey({ autoIncrement: true }),
+		product: integer()
+			.notNull()
+			.references(() => product.id),
+		characteristic: text().notNull(),
+		/** `conditionKey` of core, without a bias. */
+		conditionKey: text().notNull(),
+		/** Hash of the sets and verdicts behind it. */
+		basisHash: text().notNull(),
+		/** Lot means and covariance within lots, packed by `packJoint` of core. */
+		joint: blob({ mode: 'buffer' }).notNull()
+	},
+	(table) => [
+		uniqueIndex('joint_distribution_once').on(
+			table.product,
+			table.characteristic,
+			table.conditionKey,
+			table.basisHash
+		)
+	]
+);
+
+/**
+ * Distributions somebody entered because only their summary exists. Append-only: the newest of a
+ * condition holds, and only where nothing is measured.
+ */
+export const enteredDistribution = sqliteTable(
+	'entered_distribution',
+	{
+		id: integer().primaryKey({ autoIncrement: true }),
+		product: integer()
+			.notNull()
+			.references(() => product.id),
+		characteristic: text().notNull(),
+		/** `conditionKey` of core, with the bias. */
+		conditionKey: text().notNull(),
+		/** `enteredValues` of core: n, mean and deviation of transformed values. */
+		entered: text({ mode: 'json' }).notNull(),
+		reason: text().notNull(),
+		/** Where the summary comes from, in words. */
+		source: text().notNull(),
+		by: text()
+			.notNull()
+			.references(() => person.id),
+		at: text().notNull()
+	},
+	(table) => [index('entered_distribution_by_product').on(table.product, table.characteristic)]
 );
 
 /** A computed limit, kept under everything it depends on. */
