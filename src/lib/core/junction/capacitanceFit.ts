@@ -324,7 +324,10 @@ export class CapacitanceFitter {
 		result[at + FLAGS] = hit | (converged ? CONVERGED : 0) | (identifiable ? IDENTIFIABLE : 0);
 	}
 
-	/** Standard errors from the inverse normal matrix; false when that is singular. */
+	/**
+	 * Standard errors from the inverse normal matrix. False when that is singular to working
+	 * precision, or when V_j or M is not known to its own size: the readings don't tell them apart.
+	 */
 	private computeErrors(size: number, cost: number): boolean {
 		this.errors.fill(NaN);
 		const scaled = this.damped;
@@ -343,6 +346,10 @@ export class CapacitanceFitter {
 			if (i === POTENTIAL) this.errors[i] = error * Math.exp(this.current[POTENTIAL]!);
 			else this.errors[i] = i === EXPONENT ? error : error * this.scale;
 		}
-		return true;
+		const isKnown = (i: number, value: number) => !(this.errors[i]! > value);
+		return (
+			isKnown(POTENTIAL, Math.exp(this.current[POTENTIAL]!)) &&
+			isKnown(EXPONENT, this.current[EXPONENT]!)
+		);
 	}
 }
