@@ -251,9 +251,40 @@ export const sweepBlock = sqliteTable(
 	]
 );
 
+/** Scalar readings: one value a device, with what the value says of it. */
+export const readingBlock = sqliteTable(
+	'reading_block',
+	{
+		set: integer()
+			.notNull()
+			.references(() => measurementSet.id, { onDelete: 'cascade' }),
+		/** Key of the catalogue of core: `I_R`. */
+		characteristic: text().notNull(),
+		conditionKey: text().notNull(),
+		/** 0 for the first reading of a device, 1 for its second … */
+		repeat: integer().notNull(),
+		chunk: integer().notNull(),
+		/** One unit of the stored numbers in SI: 1e-9 for a file in nA. */
+		unitScale: real().notNull(),
+		/** Float64 little endian, one a device; NaN = absent. */
+		values: blob({ mode: 'buffer' }).notNull(),
+		/** One signed byte a device: at most (−1), exactly (0), at least (1). */
+		censored: blob({ mode: 'buffer' }).notNull()
+	},
+	(table) => [
+		primaryKey({
+			columns: [table.set, table.characteristic, table.conditionKey, table.repeat, table.chunk]
+		})
+	]
+);
+
 // 6 · Quarantine and verdicts
 
-/** Devices the suspect rule found at import; a verdict decides what becomes of them. */
+/**
+ * Devices the suspect rule found at import; a verdict decides what becomes of them. What is suspect
+ * is keyed by `measuredKey` of core: a capacitance sweep by its condition alone, others with what
+ * was measured before it.
+ */
 export const suspect = sqliteTable(
 	'suspect',
 	{
