@@ -17,6 +17,17 @@ describe('the catalogue of characteristics', () => {
 		});
 	});
 
+	it.each([
+		['V_F', 'V', 'identity'],
+		['I_R', 'A', 'ln'],
+		['V_(BR)', 'V', 'identity'],
+		['r_s', 'Ω', 'ln'],
+		['t_rr', 's', 'ln'],
+		['R_th(j-mb)', 'K/W', 'ln']
+	])('takes %s as readings in %s, summed up by %s', (key, unit, transform) => {
+		expect(findCharacteristic(key)).toMatchObject({ unit, transform, measuredAs: 'reading' });
+	});
+
 	it('does not know what nobody measures', () => {
 		expect(findCharacteristic('C_j')).toBeUndefined();
 	});

@@ -1,3 +1,4 @@
+import type { Condition } from './condition';
 import { symbolText, type LetterSymbol } from './symbol';
 
 /** What is measured or computed of a device, as tables, templates and files name it. */
@@ -9,7 +10,9 @@ export interface Characteristic {
 	/** SI unit of the stored values. */
 	readonly unit: string;
 	/** What its value depends on, beside the junction temperature. */
-	readonly axes: readonly ('frequency' | 'reverseVoltage')[];
+	readonly axes: readonly Exclude<keyof Condition, 'temperatureCelsius'>[];
+	/** Whether files give it as sweeps along the bias or as single readings. */
+	readonly measuredAs: 'sweep' | 'reading';
 	/** How values are transformed before they are summed up, unless somebody overrides it. */
 	readonly transform: 'identity' | 'ln' | 'log10';
 	/** Whether it can only fall as reverse bias rises. */
@@ -27,8 +30,79 @@ export const CHARACTERISTICS = [
 		name: 'Total capacitance',
 		unit: 'F',
 		axes: ['frequency', 'reverseVoltage'],
+		measuredAs: 'sweep',
 		transform: 'ln',
 		fallsWithReverseVoltage: true
+	},
+	{
+		key: 'V_F',
+		symbol: { quantity: 'V', subscript: 'F' },
+		name: 'Forward voltage',
+		unit: 'V',
+		axes: ['forwardCurrent', 'pulseDuration'],
+		measuredAs: 'reading',
+		transform: 'identity',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 'I_R',
+		symbol: { quantity: 'I', subscript: 'R' },
+		name: 'Reverse current',
+		unit: 'A',
+		axes: ['reverseVoltage', 'pulseDuration'],
+		measuredAs: 'reading',
+		transform: 'ln',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 'V_(BR)',
+		symbol: { quantity: 'V', subscript: '(BR)' },
+		name: 'Breakdown voltage',
+		unit: 'V',
+		axes: ['reverseCurrent', 'pulseDuration'],
+		measuredAs: 'reading',
+		transform: 'identity',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 'r_s',
+		symbol: { quantity: 'r', subscript: 's' },
+		name: 'Series resistance',
+		unit: 'Ω',
+		axes: ['frequency', 'reverseVoltage', 'forwardCurrent'],
+		measuredAs: 'reading',
+		transform: 'ln',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 't_rr',
+		symbol: { quantity: 't', subscript: 'rr' },
+		name: 'Reverse recovery time',
+		unit: 's',
+		axes: ['forwardCurrent', 'reverseVoltage', 'reverseCurrent', 'currentSlope'],
+		measuredAs: 'reading',
+		transform: 'ln',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 'R_th(j-mb)',
+		symbol: { quantity: 'R', subscript: 'th(j-mb)' },
+		name: 'Thermal resistance from junction to mounting base',
+		unit: 'K/W',
+		axes: [],
+		measuredAs: 'reading',
+		transform: 'ln',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 'R_th(j-a)',
+		symbol: { quantity: 'R', subscript: 'th(j-a)' },
+		name: 'Thermal resistance from junction to ambient',
+		unit: 'K/W',
+		axes: [],
+		measuredAs: 'reading',
+		transform: 'ln',
+		fallsWithReverseVoltage: false
 	}
 ] as const satisfies readonly Characteristic[];
 

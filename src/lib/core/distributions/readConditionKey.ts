@@ -1,10 +1,8 @@
-import { condition, type Condition } from '../characteristics/condition';
+import { condition, CONDITION_KEYS, type Condition } from '../characteristics/condition';
 
-const FIELDS = new Map<string, keyof Condition>([
-	['T', 'temperatureCelsius'],
-	['f', 'frequency'],
-	['VR', 'reverseVoltage']
-]);
+const FIELDS = new Map<string, keyof Condition>(
+	condition.keyof().options.map((part) => [CONDITION_KEYS[part], part])
+);
 
 /**
  * The condition that `conditionKey` wrote.

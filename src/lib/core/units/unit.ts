@@ -1,7 +1,16 @@
 import { decimalOf, magnitude, numberOf, plus, times } from './decimal';
 
 /** The kinds of quantity that files and tables hold. */
-export type UnitKind = 'capacitance' | 'voltage' | 'current' | 'frequency' | 'temperature';
+export type UnitKind =
+	| 'capacitance'
+	| 'voltage'
+	| 'current'
+	| 'resistance'
+	| 'time'
+	| 'thermalResistance'
+	| 'currentSlope'
+	| 'frequency'
+	| 'temperature';
 
 export interface Unit {
 	/** As it is printed. */
@@ -34,6 +43,22 @@ export const UNITS = {
 		{ symbol: 'µA', scale: 1e-6, spellings: ['uA'] },
 		{ symbol: 'nA', scale: 1e-9 },
 		{ symbol: 'pA', scale: 1e-12 }
+	],
+	resistance: [
+		{ symbol: 'Ω', scale: 1, spellings: ['\u2126', 'ohm', 'Ohm', 'ohms'] },
+		{ symbol: 'mΩ', scale: 1e-3, spellings: ['m\u2126', 'mohm', 'mOhm', 'milliohm'] },
+		{ symbol: 'kΩ', scale: 1e3, spellings: ['k\u2126', 'kohm', 'kOhm', 'kiloohm'] }
+	],
+	time: [
+		{ symbol: 's', scale: 1, spellings: ['second', 'seconds'] },
+		{ symbol: 'ms', scale: 1e-3, spellings: ['millisecond'] },
+		{ symbol: 'µs', scale: 1e-6, spellings: ['us', 'microsecond'] },
+		{ symbol: 'ns', scale: 1e-9, spellings: ['nanosecond'] }
+	],
+	thermalResistance: [{ symbol: 'K/W', scale: 1, spellings: ['°C/W', 'C/W', 'degC/W'] }],
+	currentSlope: [
+		{ symbol: 'A/s', scale: 1 },
+		{ symbol: 'A/µs', scale: 1e6, spellings: ['A/us'] }
 	],
 	frequency: [
 		{ symbol: 'Hz', scale: 1, spellings: ['hertz'] },
