@@ -18,6 +18,7 @@ export function samplePolicy(id = 1, changes: Partial<LimitPolicy> = {}): Policy
 			minimumLots: 3,
 			minimumDevices: 30,
 			drift: 0,
+			uncertaintyTreatment: 'outwards',
 			resolution: { significantFigures: 3 },
 			...changes
 		}

@@ -85,8 +85,8 @@ export const DEMO_DRAFTS: readonly DemoDraft[] = [
 
 /** Opens and fills the demo's drafts. One that is there already is left as people left it. */
 export async function seedDrafts(stores: Stores, people: DemoPeople): Promise<void> {
-	const policy = (await listPolicies(stores.db)).find(({ rules }) => rules.method === 'normal');
-	if (policy === undefined) throw new Error('there is no policy of method normal');
+	const [policy] = await listPolicies(stores.db);
+	if (policy === undefined) throw new Error('there is no limit policy');
 	for (const draft of DEMO_DRAFTS) await seedDraft(stores, draft, people, policy.id);
 }
 

@@ -1,6 +1,6 @@
 import type { Basis } from '$lib/core/limits/basis';
 import type { LimitRow } from '$lib/core/limits/limit';
-import type { Side } from '$lib/core/limits/methods/method';
+import type { Side } from '$lib/core/limits/allowance';
 
 /** A limit row as a page shows it: the printed digits, without the derivations. */
 export interface GridRow {

@@ -77,9 +77,12 @@ describe('sigma', () => {
 
 describe('what is refused', () => {
 	it.each<[string, Partial<LimitPolicy>, string]>([
-		['lots', { method: 'lots' }, limitMessages.methodNotYet('lots')],
-		['order', { method: 'order' }, limitMessages.methodNotYet('order')],
-		['content between both', { tails: 'both' }, limitMessages.bothTailsNotYet()],
+		['order of few', { method: 'order' }, limitMessages.orderNeedsMore(368, 12, 2)],
+		[
+			'order of few between both',
+			{ method: 'order', tails: 'both' },
+			limitMessages.orderNeedsMore(473, 12, 2)
+		],
 		['too few lots', { minimumLots: 4 }, limitMessages.tooFewLots(4, 3)],
 		['too few devices', { minimumDevices: 30 }, limitMessages.tooFewDevices(30, 12)]
 	])('%s', (_, rules, sentence) => {
@@ -163,7 +166,11 @@ describe('allowances', () => {
 });
 
 /** Redoes a minimum or maximum from the texts of its derivation alone, and gives its digits. */
-function redone(value: LimitValue, side: 'minimum' | 'maximum', rules: LimitPolicy): string[] {
+function redone(
+	value: LimitValue,
+	side: 'minimum' | 'maximum',
+	rules: LimitPolicy & { drift: number }
+): string[] {
 	const line = (name: string) => readDigits(lineOf(value, name)?.text ?? '');
 	const sign = side === 'minimum' ? -1 : 1;
 	const raw = Math.exp(line('Mean of ln C') + sign * line('Factor k₁') * line('Spread of ln C'));

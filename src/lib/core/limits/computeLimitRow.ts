@@ -1,20 +1,19 @@
 import type { Condition } from '../characteristics/condition';
 import type { Distribution } from '../distributions/summary';
 import { limitMessages } from '../messages/limits';
-import { inSi } from '../units/unit';
 import type { Basis } from './basis';
-import { fixed, pValue } from './digits';
+import type { Allowance, Side } from './allowance';
 import { engineVersion } from './engineVersion';
 import { gateRefusals } from './gates';
-import type { LimitRow, LimitValue } from './limit';
-import { limitChain } from './limitChain';
-import { limitSteps } from './limitSteps';
-import { LOTS_DIFFER_BELOW, lotTest, type LotTest } from './lotTest';
-import type { Margin, Side } from './methods/method';
+import type { LimitRow, LimitValue, TestYield } from './limit';
+import { limitValueOn } from './limitValueOn';
+import { lotTest } from './lotTest';
 import { METHODS } from './methods/methods';
 import { DEFAULT_K } from './methods/sigma';
 import type { LimitPolicy } from './policy';
-import { sampleSteps } from './sampleSteps';
+import { modelWarnings, sampleWarnings } from './rowWarnings';
+import { statedUncertainty } from './statedUncertainty';
+import { testYield } from './testYield';
 import { typicalValue } from './typicalValue';
 
 export interface LimitRowOptions {
@@ -30,6 +29,10 @@ export interface LimitRowOptions {
 	readonly declaredBasis?: Basis;
 	/** How the values are called in the derivation; `C`, unless said otherwise. */
 	readonly symbol?: string;
+	/** Systematic uncertainty; that of the sets, unless given. */
+	readonly uncertainty?: Allowance;
+	/** A what-if may see what the house rule gives; it is warned, and nothing is printed from it. */
+	readonly allowsHouseRule?: boolean;
 }
 
 /**
@@ -58,13 +61,15 @@ export function computeLimitRow(
 		refusals: limits.refusals,
 		warnings: [
 			...limits.warnings,
-			...(distribution.quarantined > 0
-				? [limitMessages.quarantined(distribution.quarantined)]
-				: []),
-			...(distribution.uncertainty === null && isPromised
-				? [limitMessages.uncertaintyNotStated()]
-				: [])
+			...sampleWarnings(distribution, {
+				isPromised,
+				isUncertaintyStated: distribution.uncertainty !== null || options.uncertainty !== undefined
+			})
 		],
+		...(limits.requiredSampleSize === undefined
+			? {}
+			: { requiredSampleSize: limits.requiredSampleSize }),
+		...(limits.testYield === undefined ? {} : { testYield: limits.testYield }),
 		sampleSize: distribution.sampleSize,
 		independentLots: distribution.independentLots,
 		policyVersion: options.policyVersion,
@@ -78,13 +83,16 @@ interface Limits {
 	readonly maximum: LimitValue | null;
 	readonly refusals: string[];
 	readonly warnings: string[];
+	readonly requiredSampleSize?: number | undefined;
+	readonly testYield?: TestYield;
 }
 
-const refused = (...refusals: string[]): Limits => ({
+const refused = (refusals: string[], requiredSampleSize?: number): Limits => ({
 	minimum: null,
 	maximum: null,
 	refusals,
-	warnings: []
+	warnings: [],
+	requiredSampleSize
 });
 
 function computeLimits(
@@ -96,79 +104,52 @@ function computeLimits(
 ): Limits {
 	const gates = gateRefusals(distribution, rules);
 	const outcome = METHODS[rules.method]({ distribution, rules, sides });
-	if (outcome.status === 'refused') return refused(outcome.message, ...gates);
-	if (gates.length > 0) return refused(...gates);
-	if (rules.method === 'sigma' && options.declaredBasis !== 'tested') {
-		return refused(limitMessages.sigmaNeedsTest(rules.k ?? DEFAULT_K));
+	if (outcome.status === 'refused') {
+		return refused([outcome.message, ...gates], outcome.requiredSampleSize);
 	}
+	if (gates.length > 0) return refused(gates);
+	const isUntested = rules.method === 'sigma' && options.declaredBasis !== 'tested';
+	const houseRule = isUntested ? [limitMessages.sigmaNeedsTest(rules.k ?? DEFAULT_K)] : [];
+	if (isUntested && options.allowsHouseRule !== true) return refused(houseRule);
 
 	const lots = lotTest(distribution);
-	const limitOn = (side: Side) =>
-		sides.includes(side)
-			? limitValue(distribution, rules, options, { side, margin: outcome.margin, lots })
-			: null;
+	const { isPooled } = outcome;
+	const uncertainty = statedUncertainty(distribution, rules, options.uncertainty);
+	const limitOn = (side: Side) => {
+		const limit = outcome.limits[side];
+		return limit === undefined
+			? null
+			: limitValueOn(side, limit, { distribution, rules, options, lots, isPooled, uncertainty });
+	};
 	const [minimum, maximum] = [limitOn('minimum'), limitOn('maximum')];
 
 	if (minimum !== null && minimum.printed <= 0 && minimum.raw > 0) {
-		return refused(limitMessages.nothingLeft());
+		return refused([limitMessages.nothingLeft()]);
 	}
 	if (
 		(minimum !== null && minimum.raw > typical.raw) ||
 		(maximum !== null && maximum.raw < typical.raw)
 	) {
-		return refused(limitMessages.medianOutside());
+		return refused([limitMessages.medianOutside()]);
 	}
+	const test = { minimum: minimum?.test?.value ?? null, maximum: maximum?.test?.value ?? null };
 	return {
 		minimum,
 		maximum,
 		refusals: [],
 		warnings: [
-			...(lots !== undefined && lots.p < LOTS_DIFFER_BELOW
-				? [limitMessages.lotsDiffer(lots.lots, lotRatio(lots), pValue(lots.p))]
-				: []),
+			...modelWarnings(distribution, {
+				lots,
+				isPooled,
+				restsOnNormality: rules.method === 'normal' || rules.method === 'lots'
+			}),
 			...outcome.warnings,
+			...houseRule,
 			...(minimum?.text === typical.text ? [limitMessages.equalsTypical('minimum')] : []),
 			...(maximum?.text === typical.text ? [limitMessages.equalsTypical('maximum')] : [])
-		]
-	};
-}
-
-function lotRatio({ F }: LotTest): string {
-	return Number.isFinite(F) ? fixed(F, 2) : '∞';
-}
-
-function limitValue(
-	distribution: Distribution,
-	rules: LimitPolicy,
-	{ condition, unit, unitScale, symbol = 'C' }: LimitRowOptions,
-	{ side, margin, lots }: { side: Side; margin: Margin; lots: LotTest | undefined }
-): LimitValue {
-	const chain = limitChain({
-		distribution,
-		factor: margin.factor,
-		side,
-		rules,
-		uncertainty: distribution.uncertainty ?? 0,
-		unitScale
-	});
-	const tableUnit = { symbol: unit, scale: unitScale };
-	return {
-		raw: inSi(chain.raw, tableUnit),
-		printed: inSi(chain.printed.value, tableUnit),
-		text: chain.printed.text,
-		derivation: [
-			...sampleSteps(distribution, condition),
-			...limitSteps({
-				distribution,
-				symbol,
-				unit,
-				unitScale,
-				side,
-				margin,
-				rules,
-				lots,
-				chain
-			})
-		]
+		],
+		...(test.minimum === null && test.maximum === null
+			? {}
+			: { testYield: testYield(distribution, test) })
 	};
 }

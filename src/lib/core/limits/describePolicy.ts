@@ -1,5 +1,6 @@
 import type { LimitPolicy } from './policy';
-import { percent } from './digits';
+import { driftText } from './driftText';
+import { DEFAULT_K } from './methods/sigma';
 import { resolutionText } from './resolutionText';
 
 /** What a policy promises, in one or two sentences. */
@@ -10,15 +11,21 @@ export function describePolicy(rules: LimitPolicy): string {
 /** Method and promise without the gates: for a line of a table. */
 export function methodText(rules: LimitPolicy): string {
 	switch (rules.method) {
-		case 'normal':
 		case 'lots':
+			return `For devices of future lots: ${promiseText(rules)}`;
+		case 'normal':
+			return `One normal population: ${promiseText(rules)}`;
 		case 'order':
-			return `Content ${rules.content} at confidence ${rules.confidence}, ${rules.tails === 'each' ? 'each limit on its own' : 'both limits together'}.`;
+			return `Any shape, by order statistics: ${promiseText(rules)}`;
 		case 'sigma':
-			return `Mean ± ${rules.k ?? 3} standard deviations; no guarantee by itself.`;
+			return `Mean ± ${rules.k ?? DEFAULT_K} standard deviations; no guarantee by itself.`;
 		default:
 			return rules.method satisfies never;
 	}
+}
+
+function promiseText({ content, confidence, tails }: LimitPolicy): string {
+	return `content ${content} at confidence ${confidence}, ${tails === 'each' ? 'each limit on its own' : 'both limits together'}.`;
 }
 
 function gateText({ minimumLots, minimumDevices }: LimitPolicy): string {
@@ -27,5 +34,6 @@ function gateText({ minimumLots, minimumDevices }: LimitPolicy): string {
 
 function roundingText({ drift, resolution }: LimitPolicy): string {
 	const rounding = `${resolutionText(resolution, '')}, rounded outwards.`.replace('\u00a0,', ',');
-	return drift === 0 ? rounding : `Drift ${percent(drift)} outwards. ${rounding}`;
+	const words = driftText(drift);
+	return words === 'none' ? rounding : `Drift ${words} outwards. ${rounding}`;
 }

@@ -2,4 +2,4 @@
  * Raised whenever a limit, its derivation or its refusal can come out differently for the same
  * inputs. Stored limits are kept under it, and a datasheet's evidence names it.
  */
-export const engineVersion = '1.0.0';
+export const engineVersion = '2.0.0';

@@ -1,27 +1,27 @@
-import type { Distribution } from '../distributions/summary';
-
-/** Mean and spread of the transformed values, with the values in the unit of the table. */
-export interface TransformedMoments {
-	readonly mean: number;
-	readonly standardDeviation: number;
-}
+import type { Transform } from '../distributions/summary';
 
 /**
- * The moments as a derivation prints them: ln of pF is a number people recognise, ln of F is not.
- * A change of unit moves the mean of a logarithm and leaves its spread alone.
+ * The mean of transformed values as a derivation prints it: ln of pF is a number people recognise,
+ * ln of F is not. A change of unit moves the mean of a logarithm.
  */
-export function inTableUnit(
-	{ transform, mean, standardDeviation }: Distribution,
-	unitScale: number
-): TransformedMoments {
+export function meanInTableUnit(mean: number, transform: Transform, unitScale: number): number {
 	switch (transform) {
 		case 'identity':
-			return { mean: mean / unitScale, standardDeviation: standardDeviation / unitScale };
+			return mean / unitScale;
 		case 'ln':
-			return { mean: mean - Math.log(unitScale), standardDeviation };
+			return mean - Math.log(unitScale);
 		case 'log10':
-			return { mean: mean - Math.log10(unitScale), standardDeviation };
+			return mean - Math.log10(unitScale);
 		default:
 			return transform satisfies never;
 	}
+}
+
+/** A deviation of transformed values: a change of unit leaves that of a logarithm alone. */
+export function deviationInTableUnit(
+	deviation: number,
+	transform: Transform,
+	unitScale: number
+): number {
+	return transform === 'identity' ? deviation / unitScale : deviation;
 }

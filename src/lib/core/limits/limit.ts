@@ -14,6 +14,25 @@ export const derivationStep = z.object({
 });
 export type DerivationStep = z.infer<typeof derivationStep>;
 
+/** The limit of the production test behind a printed one. */
+export const testLimitValue = z.object({
+	/** SI */
+	value: z.number(),
+	text: z.string(),
+	derivation: z.array(derivationStep)
+});
+export type TestLimit = z.infer<typeof testLimitValue>;
+
+/** How many devices pass the test. */
+export const testYield = z.object({
+	/** Share, from the normal shape of all devices together. */
+	predicted: z.number(),
+	/** Of the stored devices; `null` where more fail than are stored one by one. */
+	passed: z.number().int().nullable(),
+	of: z.number().int()
+});
+export type TestYield = z.infer<typeof testYield>;
+
 /** What the machine said, and beside it what an engineer decided. */
 export const limitValue = z.object({
 	/** Before drift, uncertainty and rounding; SI. */
@@ -22,7 +41,11 @@ export const limitValue = z.object({
 	printed: z.number(),
 	/** As printed, in the unit of the table, digits kept: "12.50". */
 	text: z.string(),
-	derivation: z.array(derivationStep)
+	derivation: z.array(derivationStep),
+	/** Where every device is tested, or the policy states a guard band. */
+	test: testLimitValue.optional(),
+	/** Distance from the mean in standard deviations of the transformed values. */
+	factor: z.number().optional()
 });
 export type LimitValue = z.infer<typeof limitValue>;
 
@@ -41,6 +64,10 @@ export const limitRow = z.object({
 	/** Why a minimum or maximum is missing; empty when both are there. */
 	refusals: z.array(z.string()),
 	warnings: z.array(z.string()),
+	/** Devices needed a side where the method refuses so few. */
+	requiredSampleSize: z.number().int().optional(),
+	/** Of the test limits, where there are some. */
+	testYield: testYield.optional(),
 	sampleSize: z.number().int(),
 	independentLots: z.number().int(),
 	policyVersion: z.number().int(),

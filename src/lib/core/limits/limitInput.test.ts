@@ -9,7 +9,8 @@ const input: LimitInput = {
 	unitScale: 1e-12,
 	declaredBasis: 'characterized',
 	sides: ['minimum', 'maximum'],
-	policyHash: 'abc'
+	policyHash: 'abc',
+	usesExtremes: false
 };
 
 it('is the same for the same inputs', () => {
@@ -27,7 +28,8 @@ it.each<[string, Partial<LimitInput>]>([
 	['another unit', { unit: 'nF', unitScale: 1e-9 }],
 	['another basis', { declaredBasis: 'tested' }],
 	['one side alone', { sides: ['minimum'] }],
-	['another policy', { policyHash: 'abd' }]
+	['another policy', { policyHash: 'abd' }],
+	['devices that matter one by one', { usesExtremes: true }]
 ])('differs with %s', (_, change) => {
 	expect(limitInputText({ ...input, ...change })).not.toBe(limitInputText(input));
 });

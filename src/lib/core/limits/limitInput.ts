@@ -1,7 +1,7 @@
 import type { Distribution } from '../distributions/summary';
 import type { Basis } from './basis';
 import { engineVersion } from './engineVersion';
-import type { Side } from './methods/method';
+import type { Side } from './allowance';
 
 export interface LimitInput {
 	readonly partNumber: string;
@@ -12,15 +12,17 @@ export interface LimitInput {
 	readonly sides: readonly Side[];
 	/** Hash of the policy version's rules. */
 	readonly policyHash: string;
+	/** Whether single devices matter: order statistics, and the yield of a test. */
+	readonly usesExtremes: boolean;
 }
 
 /**
  * Everything a limit depends on, as one text in one order; its hash is the trace from a printed
  * number to its devices. It covers the summary with the stated uncertainty, the sums of each lot
- * and wafer, the unit, the basis rule, the policy and the engine.
+ * and wafer, the outermost devices where they matter, the unit, the basis rule, the policy and the engine.
  */
 export function limitInputText(input: LimitInput): string {
-	const { groups, ...summary } = input.distribution;
+	const { groups, extremes, ...summary } = input.distribution;
 	return JSON.stringify({
 		engine: engineVersion,
 		partNumber: input.partNumber,
@@ -38,6 +40,7 @@ export function limitInputText(input: LimitInput): string {
 			of.sumOfSquares,
 			of.lowest,
 			of.highest
-		])
+		]),
+		...(input.usesExtremes ? { extremes } : {})
 	});
 }

@@ -1,11 +1,15 @@
 import type { Distribution } from '../distributions/summary';
 import { TRANSFORMS } from '../distributions/transforms';
-import { fixed, percent, pValue, readDigits, significant } from './digits';
-import { inTableUnit } from './inTableUnit';
+import { NO_ALLOWANCE, isNothing, type Allowance, type Side } from './allowance';
+import { allowanceText } from './allowanceText';
+import { readDigits, significant } from './digits';
+import { driftOn } from './drift';
 import type { DerivationStep } from './limit';
-import { outwards, type LimitChain } from './limitChain';
-import { LOTS_DIFFER_BELOW, type LotTest } from './lotTest';
-import type { Margin, Side } from './methods/method';
+import { limitChain, type LimitChain } from './limitChain';
+import { lotStep } from './lotStep';
+import type { LotTest } from './lotTest';
+import { marginDigits, marginSteps, sumOf, type MarginDigits } from './marginSteps';
+import type { SideLimit } from './methods/method';
 import type { LimitPolicy } from './policy';
 import { resolutionText } from './resolutionText';
 
@@ -16,9 +20,14 @@ export interface LimitStepsInput {
 	readonly unit: string;
 	readonly unitScale: number;
 	readonly side: Side;
-	readonly margin: Margin;
+	readonly limit: SideLimit;
+	readonly isPooled: boolean;
 	readonly rules: LimitPolicy;
 	readonly lots: LotTest | undefined;
+	/** Systematic uncertainty that the sets state. */
+	readonly stated: Allowance | null;
+	/** What of it the policy adds. */
+	readonly uncertainty: Allowance;
 	readonly chain: LimitChain;
 }
 
@@ -39,108 +48,64 @@ export function limitSteps(input: LimitStepsInput): DerivationStep[] {
 }
 
 interface ChainDigits {
-	readonly mean: string;
-	readonly deviation: string;
-	readonly factor: string;
+	readonly margin: MarginDigits | undefined;
 	readonly raw: string;
 	readonly afterDrift: string;
 	readonly afterUncertainty: string;
 }
 
-function digitsOf(input: LimitStepsInput, figures: number): ChainDigits {
-	const moments = inTableUnit(input.distribution, input.unitScale);
-	const isLogarithm = input.distribution.transform !== 'identity';
+function digitsOf({ limit, chain, ...input }: LimitStepsInput, figures: number): ChainDigits {
+	const { transform } = input.distribution;
 	return {
-		mean: isLogarithm ? fixed(moments.mean, figures) : significant(moments.mean, figures),
-		deviation: isLogarithm
-			? fixed(moments.standardDeviation, figures + 1)
-			: significant(moments.standardDeviation, figures),
-		factor: fixed(input.margin.factor, figures - 1),
-		raw: significant(input.chain.raw, figures),
-		afterDrift: significant(input.chain.afterDrift, figures),
-		afterUncertainty: significant(input.chain.afterUncertainty, figures)
+		margin:
+			limit.kind === 'margin'
+				? marginDigits(limit, { transform, unitScale: input.unitScale, figures })
+				: undefined,
+		raw: significant(chain.raw, figures),
+		afterDrift: significant(chain.afterDrift, figures),
+		afterUncertainty: significant(chain.afterUncertainty, figures)
 	};
 }
 
 /** Redoes the sum from the printed digits alone. */
 function canBeRedone(input: LimitStepsInput, digits: ChainDigits): boolean {
-	const { rules, side, distribution, chain } = input;
-	const uncertainty = distribution.uncertainty ?? 0;
-	const sign = side === 'minimum' ? -1 : 1;
-	const raw = TRANSFORMS[distribution.transform].invert(
-		readDigits(digits.mean) + sign * readDigits(digits.factor) * readDigits(digits.deviation)
-	);
-	const isPrinted = (value: number) =>
-		outwards(value, { side, rules, uncertainty }).printed.text === chain.printed.text;
+	const { rules, side, uncertainty, unitScale, distribution, chain } = input;
+	const arrives = (raw: number) =>
+		limitChain(raw, { side, rules, uncertainty, unitScale }).printed.text === chain.printed.text;
 	const isRounded = (value: number) =>
-		outwards(value, { side, rules: { ...rules, drift: 0 }, uncertainty: 0 }).printed.text ===
-		chain.printed.text;
+		limitChain(value, {
+			side,
+			rules: { ...rules, drift: 0 },
+			uncertainty: NO_ALLOWANCE,
+			unitScale
+		}).printed.text === chain.printed.text;
+	const { invert } = TRANSFORMS[distribution.transform];
 	return (
-		isPrinted(raw) &&
-		isPrinted(readDigits(digits.raw)) &&
+		(digits.margin === undefined || arrives(invert(sumOf(digits.margin, side)))) &&
+		arrives(readDigits(digits.raw)) &&
 		isRounded(readDigits(digits.afterUncertainty))
 	);
 }
 
 function steps(input: LimitStepsInput, digits: ChainDigits): DerivationStep[] {
-	const { distribution, symbol, unit, side, margin, rules, lots, chain } = input;
-	const { transform, sampleSize } = distribution;
-	const moments = inTableUnit(distribution, input.unitScale);
-	const of = `${TRANSFORMS[transform].prefix}${symbol}`;
-	const word = side === 'minimum' ? 'down' : 'up';
-	const sum = `${digits.mean} ${side === 'minimum' ? '\u2212' : '+'} ${digits.factor} × ${digits.deviation}`;
-	const ofPure = transform === 'identity' ? unit : '';
+	const { unit, side, lots, chain, limit } = input;
+	const compared = lots === undefined ? [] : [lotStep(lots, input.isPooled)];
 	return [
-		{
-			name: `Mean of ${of}`,
-			method: `All ${sampleSize} devices together, not interpolated. ${symbol} in ${unit}.`,
-			value: moments.mean,
-			unit: ofPure,
-			text: digits.mean
-		},
-		{
-			name: `Spread of ${of}`,
-			method: 'Standard deviation of all devices about their own mean, divided by n − 1.',
-			value: moments.standardDeviation,
-			unit: ofPure,
-			text: digits.deviation
-		},
-		...(lots === undefined ? [] : [lotStep(lots)]),
-		{
-			name: `Factor ${margin.symbol}`,
-			method: margin.method,
-			value: margin.factor,
-			unit: '',
-			text: digits.factor
-		},
+		...(limit.kind === 'margin' && digits.margin !== undefined
+			? marginSteps(limit, { ...input, digits: digits.margin, compared })
+			: compared),
+		...(limit.kind === 'ranked' ? [rankStep(limit.rank, limit.method, side)] : []),
 		{
 			name: `Raw ${side}`,
-			method: rawText(transform, sum),
+			method: rawText(input, digits.margin),
 			value: chain.raw,
 			unit,
 			text: digits.raw
 		},
+		...allowanceSteps(input, digits),
 		{
-			name: 'Drift over life',
-			method:
-				rules.drift === 0 ? 'The policy allows for none.' : `${percent(rules.drift)} outwards.`,
-			value: chain.afterDrift,
-			unit,
-			text: digits.afterDrift
-		},
-		{
-			name: 'Systematic uncertainty',
-			method:
-				distribution.uncertainty === null
-					? 'None stated, none added.'
-					: `${percent(distribution.uncertainty)} outwards, the largest that the sets state.`,
-			value: chain.afterUncertainty,
-			unit,
-			text: digits.afterUncertainty
-		},
-		{
-			name: `Round ${word}`,
-			method: `${resolutionText(rules.resolution, unit)}, outwards, in decimal arithmetic.`,
+			name: `Round ${side === 'minimum' ? 'down' : 'up'}`,
+			method: `${resolutionText(input.rules.resolution, unit)}, outwards, in decimal arithmetic.`,
 			value: chain.printed.value,
 			unit,
 			text: chain.printed.text
@@ -148,8 +113,15 @@ function steps(input: LimitStepsInput, digits: ChainDigits): DerivationStep[] {
 	];
 }
 
-function rawText(transform: Distribution['transform'], sum: string): string {
-	switch (transform) {
+function rankStep(rank: number, method: string, side: Side): DerivationStep {
+	const from = side === 'minimum' ? 'below' : 'above';
+	return { name: `Rank from ${from}`, method, value: rank, unit: '', text: String(rank) };
+}
+
+function rawText({ side, distribution }: LimitStepsInput, digits?: MarginDigits): string {
+	if (digits === undefined) return 'The value of that device.';
+	const sum = `${digits.mean} ${side === 'minimum' ? '\u2212' : '+'} ${digits.factor} × ${digits.deviation}`;
+	switch (distribution.transform) {
 		case 'identity':
 			return sum;
 		case 'ln':
@@ -157,20 +129,41 @@ function rawText(transform: Distribution['transform'], sum: string): string {
 		case 'log10':
 			return `10 to the power (${sum})`;
 		default:
-			return transform satisfies never;
+			return distribution.transform satisfies never;
 	}
 }
 
-function lotStep(lots: LotTest): DerivationStep {
-	const verdict =
-		lots.p < LOTS_DIFFER_BELOW
-			? 'The lots differ and are pooled all the same: the limit speaks of these lots.'
-			: `No difference is seen; that ${lots.lots} lots are alike is not shown by it. They are pooled.`;
-	return {
-		name: 'Lots compared, F',
-		method: `One-way analysis of variance between ${lots.lots} wafer lots, F(${lots.betweenDegrees}, ${lots.withinDegrees}), ${pValue(lots.p)}. ${verdict}`,
-		value: Number.isFinite(lots.F) ? lots.F : null,
-		unit: '',
-		text: Number.isFinite(lots.F) ? fixed(lots.F, 2) : '∞'
-	};
+function allowanceSteps(input: LimitStepsInput, digits: ChainDigits): DerivationStep[] {
+	const { unit, side, chain, rules, stated, uncertainty } = input;
+	const drift = driftOn(rules, side);
+	return [
+		{
+			name: 'Drift over life',
+			method: isNothing(drift)
+				? 'The policy allows for none.'
+				: `${allowanceText(drift, input)} outwards.`,
+			value: chain.afterDrift,
+			unit,
+			text: digits.afterDrift
+		},
+		{
+			name: 'Systematic uncertainty',
+			method: uncertaintyText(stated, uncertainty, input),
+			value: chain.afterUncertainty,
+			unit,
+			text: digits.afterUncertainty
+		}
+	];
+}
+
+function uncertaintyText(
+	stated: Allowance | null,
+	added: Allowance,
+	input: LimitStepsInput
+): string {
+	if (stated === null) return 'None stated, none added.';
+	if (isNothing(added) && !isNothing(stated)) {
+		return `${allowanceText(stated, input)} stated; by the policy not added.`;
+	}
+	return `${allowanceText(stated, input)} outwards, the largest that the sets state.`;
 }

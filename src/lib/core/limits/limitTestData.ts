@@ -48,6 +48,7 @@ export const PLAIN_POLICY: LimitPolicy = {
 	minimumLots: 1,
 	minimumDevices: 2,
 	drift: 0,
+	uncertaintyTreatment: 'outwards',
 	resolution: { significantFigures: 3 }
 };
 

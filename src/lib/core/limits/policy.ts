@@ -1,6 +1,7 @@
 import { z } from 'zod';
+import { allowance } from './allowance';
 
-export const limitMethod = z.enum(['normal', 'lots', 'order', 'sigma']);
+export const limitMethod = z.enum(['lots', 'normal', 'order', 'sigma']);
 export type LimitMethod = z.infer<typeof limitMethod>;
 
 /** The step a printed limit is rounded to: so many units of the table, or significant figures. */
@@ -9,6 +10,16 @@ export const resolution = z.union([
 	z.object({ significantFigures: z.number().int().min(1).max(8) })
 ]);
 export type Resolution = z.infer<typeof resolution>;
+
+/** Drift over life: the same share on both sides, or an allowance for each of them. */
+export const drift = z.union([
+	z.number().min(0).lt(1),
+	z.object({ minimum: allowance.optional(), maximum: allowance.optional() })
+]);
+export type Drift = z.infer<typeof drift>;
+
+/** What is done with the systematic uncertainty that the sets state. */
+export const uncertaintyTreatment = z.enum(['outwards', 'not-added']);
 
 /** How a limit is computed. Versioned: what uses a policy keeps the version it used. */
 export const limitPolicy = z.object({
@@ -24,9 +35,14 @@ export const limitPolicy = z.object({
 	k: z.number().positive().optional(),
 	minimumLots: z.number().int().min(1),
 	minimumDevices: z.number().int().min(2),
-	/** Relative drift allowance over life, outwards on each side. */
-	drift: z.number().min(0).lt(1).default(0),
-	resolution
+	/** Drift allowance over life, outwards. */
+	drift: drift.default(0),
+	uncertaintyTreatment: uncertaintyTreatment.default('outwards'),
+	/** r of the guard band r·U that a test limit keeps from the printed one; none, unless given. */
+	guardBand: z.number().min(0).max(10).optional(),
+	resolution,
+	/** The step of test limits; one decimal or figure finer than the printed ones, unless given. */
+	testResolution: resolution.optional()
 });
 export type LimitPolicy = z.infer<typeof limitPolicy>;
 

@@ -6,11 +6,12 @@ import { percent } from './digits';
 /** The first lines of every derivation: what was measured, and what of it counts. */
 export function sampleSteps(distribution: Distribution, condition: Condition): DerivationStep[] {
 	const { sets, sampleSize, excluded, quarantined } = distribution;
+	if (sets.length === 0) return [givenStep(distribution)];
 	const measured = sampleSize + excluded + quarantined;
 	return [
 		{
 			name: 'Measurement sets',
-			method: `${listed(sets.length === 1 ? 'Set' : 'Sets', sets)}, at ${conditionText(condition)}. ${uncertaintyText(distribution.uncertainty)}`,
+			method: `${listed(sets.length === 1 ? 'Set' : 'Sets', sets)}, at ${conditionText(condition, distribution.interpolated)}. ${uncertaintyText(distribution.uncertainty)}`,
 			value: measured,
 			unit: 'sweeps',
 			text: String(measured)
@@ -25,15 +26,33 @@ export function sampleSteps(distribution: Distribution, condition: Condition): D
 	];
 }
 
+/** Values that came without a measurement set. */
+function givenStep({ origin, sampleSize }: Distribution): DerivationStep {
+	return {
+		name: origin === 'entered' ? 'Entered summary' : 'Values',
+		method:
+			origin === 'entered'
+				? 'Mean and standard deviation as entered; no measured devices stand behind them.'
+				: 'As they were given; no measurement set stands behind them.',
+		value: sampleSize,
+		unit: 'devices',
+		text: String(sampleSize)
+	};
+}
+
 function uncertaintyText(uncertainty: number | null): string {
 	return uncertainty === null
 		? 'No set states its uncertainty.'
 		: `Largest stated uncertainty U\u00a0=\u00a0${percent(uncertainty)}.`;
 }
 
-function conditionText({ temperatureCelsius, frequency, reverseVoltage }: Condition): string {
+function conditionText(
+	{ temperatureCelsius, frequency, reverseVoltage }: Condition,
+	isInterpolated: boolean
+): string {
+	const bias = isInterpolated ? 'interpolated within each sweep to' : 'the measured';
 	return [
-		...(reverseVoltage === undefined ? [] : [`the measured ${signed(reverseVoltage)}\u00a0V`]),
+		...(reverseVoltage === undefined ? [] : [`${bias} ${signed(reverseVoltage)}\u00a0V`]),
 		`${signed(temperatureCelsius)}\u00a0°C`,
 		...(frequency === undefined ? [] : [`${frequency / 1e6}\u00a0MHz`])
 	].join(', ');

@@ -4,10 +4,37 @@ const plural = (count: number, one: string, many = `${one}s`) =>
 const quoted = (got: string | undefined) => (got === undefined ? 'nothing' : `"${got}"`);
 
 export const limitMessages = {
-	methodNotYet: (method: string) =>
-		`Limits of the method “${method}” aren't computed before the engine's next step. Choose a policy with “normal” or “sigma”.`,
-	bothTailsNotYet: () =>
-		'Content between both limits together isn’t computed before the engine’s next step. Choose a policy that promises each limit on its own.',
+	enteredHasNoLots: () =>
+		'Limits for future lots need the devices of at least three lots; this distribution was entered as a summary and says nothing of its lots.',
+	enteredLotsUnknown: (required: number) =>
+		`The policy asks for at least ${plural(required, 'independent lot')}; an entered summary says nothing of its lots.`,
+	lotsNeedLots: (required: number, actual: number) =>
+		`Limits for future lots need at least ${plural(required, 'independent lot')} (wafer lots); ${plural(actual, 'lot')} ${actual === 1 ? 'is' : 'are'} measured. Measure more lots, or test every device.`,
+	lotsNeedRepeats: () =>
+		'Limits for future lots need lots with two devices at least; with one device a lot nothing shows the spread inside a lot.',
+	lotsNeedNumbers: () =>
+		'Limits for future lots need a number from every device; some readings here are censored. Choose a policy with “order” or “normal”.',
+	bothTailsNeedNumbers: () =>
+		'Content between both limits together needs a number from every device; some readings here are censored. Choose a policy that promises each limit on its own.',
+	censoredNeedReadings: () =>
+		'Too few readings are numbers: at least three different ones are needed beside the censored ones.',
+	orderNeedsDevices: () =>
+		'Order statistics need the devices themselves; only a summary of this distribution is kept.',
+	orderNeedsMore: (required: number, actual: number, sides: number) =>
+		`Order statistics need at least ${plural(required, 'device')}${sides > 1 ? ' for each side' : ''} at this content and confidence; ${plural(actual, 'device')} ${actual === 1 ? 'is' : 'are'} measured.`,
+	rankCensored: (side: 'minimum' | 'maximum', rank: number) =>
+		side === 'minimum'
+			? `The device that would be the minimum, rank ${rank} from below, lies at or below the floor of the instrument; no minimum can be promised.`
+			: `The device that would be the maximum, rank ${rank} from above, lies at or above the clamp of the instrument; no maximum can be promised.`,
+	noLogarithm: (place: string, transform: string, value: number) =>
+		`${place}: ${transform} needs a value above zero, got ${value}. Mark readings at the floor as censored, or use “identity”.`,
+	notALimitRequest: () => 'The request is not one for limits; `errors` says where.',
+	notNormal: (statistic: string, p: string) =>
+		`The devices don’t follow the normal shape within their lots (Anderson–Darling A²\u00a0=\u00a0${statistic}, ${p}); the method rests on it.`,
+	enteredSummary: () =>
+		'The distribution was entered as a summary; no measured devices stand behind it, and it can’t be recomputed.',
+	censored: (count: number, sampleSize: number) =>
+		`${count} of ${plural(sampleSize, 'reading')} ${count === 1 ? 'is' : 'are'} censored and counted for what they say, not as values.`,
 	tooFewLots: (required: number, actual: number) =>
 		`The policy asks for at least ${plural(required, 'independent lot')}; ${plural(actual, 'lot')} ${actual === 1 ? 'is' : 'are'} measured.`,
 	tooFewDevices: (required: number, actual: number) =>

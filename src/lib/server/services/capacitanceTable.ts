@@ -6,7 +6,7 @@ import { computeLimitRow } from '$lib/core/limits/computeLimitRow';
 import { engineVersion } from '$lib/core/limits/engineVersion';
 import type { LimitRow } from '$lib/core/limits/limit';
 import { limitInputText } from '$lib/core/limits/limitInput';
-import type { Side } from '$lib/core/limits/methods/method';
+import type { Side } from '$lib/core/limits/allowance';
 import { capacitanceUnit, type TableUnit } from '$lib/core/limits/tableUnit';
 import { medianOf } from '$lib/core/limits/typicalValue';
 import { unmeasuredRow } from '$lib/core/limits/unmeasuredRow';
@@ -127,6 +127,7 @@ interface RowsWanted {
 async function limitRows(db: Connection, wanted: RowsWanted): Promise<LimitRow[]> {
 	const { request, owner, policy, unit } = wanted;
 	const { declaredBasis = 'characterized', sides = ['minimum', 'maximum'] } = request;
+	const isTested = declaredBasis === 'tested' || policy.rules.guardBand !== undefined;
 	const inputs = wanted.stored.map(({ condition, distribution }) => ({
 		condition,
 		distribution,
@@ -137,7 +138,8 @@ async function limitRows(db: Connection, wanted: RowsWanted): Promise<LimitRow[]
 				...unit,
 				declaredBasis,
 				sides,
-				policyHash: policy.hash
+				policyHash: policy.hash,
+				usesExtremes: policy.rules.method === 'order' || isTested
 			})
 		)
 	}));

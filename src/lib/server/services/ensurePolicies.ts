@@ -7,9 +7,24 @@ import { write } from '../db/write';
 import type { Stores } from '../work/stores';
 import { sha256 } from './sha256';
 
-/** What a fresh installation offers; an organization adds its own versions. */
+/** What a fresh installation offers, its default first; an organization adds its own versions. */
 export const DEFAULT_POLICIES: readonly { readonly policy: string; readonly rules: LimitPolicy }[] =
 	[
+		{
+			policy: 'future-lots-99-95',
+			rules: {
+				name: 'Future lots 99/95',
+				method: 'lots',
+				content: 0.99,
+				confidence: 0.95,
+				tails: 'each',
+				minimumLots: 3,
+				minimumDevices: 30,
+				drift: 0,
+				uncertaintyTreatment: 'outwards',
+				resolution: { significantFigures: 3 }
+			}
+		},
 		{
 			policy: 'population-99-95',
 			rules: {
@@ -21,6 +36,22 @@ export const DEFAULT_POLICIES: readonly { readonly policy: string; readonly rule
 				minimumLots: 3,
 				minimumDevices: 30,
 				drift: 0,
+				uncertaintyTreatment: 'outwards',
+				resolution: { significantFigures: 3 }
+			}
+		},
+		{
+			policy: 'any-shape-99-95',
+			rules: {
+				name: 'Any shape 99/95',
+				method: 'order',
+				content: 0.99,
+				confidence: 0.95,
+				tails: 'each',
+				minimumLots: 3,
+				minimumDevices: 30,
+				drift: 0,
+				uncertaintyTreatment: 'outwards',
 				resolution: { significantFigures: 3 }
 			}
 		},
@@ -36,6 +67,7 @@ export const DEFAULT_POLICIES: readonly { readonly policy: string; readonly rule
 				minimumLots: 1,
 				minimumDevices: 30,
 				drift: 0,
+				uncertaintyTreatment: 'outwards',
 				resolution: { significantFigures: 3 }
 			}
 		}

@@ -96,12 +96,15 @@ export class EvidenceSource {
 		const blocks = (await this.#blocksAt(key)).filter(({ grid }) => grid.includes(bias));
 		this.#leftOut ??= await this.#readLeftOut();
 		const leftOut = this.#leftOut;
-		const devices = readColumn(blocks, bias, (set, row) => leftOut.has(`${set}/${row}/${key}`));
-		const waferLots = await this.#waferLots();
+		const devices = readColumn(
+			blocks,
+			bias,
+			(set, row) => leftOut.has(`${set}/${row}/${key}`),
+			await this.#waferLots()
+		);
 		return {
 			devices,
-			independentLots: new Set(devices.map((device) => waferLots.get(device.lot) ?? device.lot))
-				.size,
+			independentLots: new Set(devices.map(({ waferLot }) => waferLot)).size,
 			uncertainty: await this.#uncertainty(new Set(blocks.map(({ set }) => set)))
 		};
 	}

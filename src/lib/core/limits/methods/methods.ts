@@ -1,17 +1,14 @@
-import { limitMessages } from '../../messages/limits';
 import type { LimitMethod } from '../policy';
+import { lotsMethod } from './lots';
 import type { Method } from './method';
 import { normalMethod } from './normal';
+import { orderMethod } from './order';
 import { sigmaMethod } from './sigma';
-
-const notYet =
-	(method: LimitMethod): Method =>
-	() => ({ status: 'refused', message: limitMessages.methodNotYet(method) });
 
 /** The one place that knows which method is computed where. */
 export const METHODS = {
+	lots: lotsMethod,
 	normal: normalMethod,
-	sigma: sigmaMethod,
-	lots: notYet('lots'),
-	order: notYet('order')
+	order: orderMethod,
+	sigma: sigmaMethod
 } as const satisfies Record<LimitMethod, Method>;

@@ -47,14 +47,10 @@ export function computeEvidence(input: EvidenceInput): ComputedEvidence {
 	if (stray !== undefined) return { status: 'refused', reason: memoDiffers(stray) };
 	if (devices.length === 0) return { status: 'refused', reason: conditionNotMeasured() };
 
-	const again = recompute(
-		devices.map(({ value }) => value),
-		rules,
-		{
-			isShared: memo.minimum !== null && memo.maximum !== null,
-			uncertainty: input.uncertainty
-		}
-	);
+	const again = recompute(devices, rules, {
+		isShared: memo.minimum !== null && memo.maximum !== null,
+		uncertainty: input.uncertainty
+	});
 	if (again.status === 'refused') return again;
 
 	const check = (side: Side): RouteCheck | null => {

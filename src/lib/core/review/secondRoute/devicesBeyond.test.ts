@@ -4,6 +4,7 @@ import { recompute } from './recompute';
 
 const device = (lot: string, value: number, name = '1') => ({
 	lot,
+	waferLot: lot,
 	wafer: '01',
 	device: name,
 	value
@@ -25,9 +26,9 @@ describe('how many devices a basis allows beyond one limit', () => {
 	// limits.md §6: at P = 0.95, γ = 0.95, n = 300 about eleven are expected.
 	// SciPy: k = nct.ppf(0.95, 299, norm.ppf(0.95)*sqrt(300))/sqrt(300); 300*norm.cdf(-k) = 10.788…
 	it('and how many a limit of that kind leaves outside on average', () => {
-		const values = Array.from({ length: 300 }, (_, i) => 1 + i / 1000);
+		const devices = Array.from({ length: 300 }, (_, i) => device('A', 1 + i / 1000));
 		const again = recompute(
-			values,
+			devices,
 			{
 				name: 'n',
 				method: 'normal',
@@ -37,6 +38,7 @@ describe('how many devices a basis allows beyond one limit', () => {
 				minimumLots: 1,
 				minimumDevices: 2,
 				drift: 0,
+				uncertaintyTreatment: 'outwards',
 				resolution: { significantFigures: 3 }
 			},
 			{ isShared: false, uncertainty: 0 }

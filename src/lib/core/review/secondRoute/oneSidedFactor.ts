@@ -1,4 +1,5 @@
 import { normalPoint, normalProbability } from './normalProbability';
+import { simpson, type Strips } from './simpson';
 
 /**
  * Strips of Simpson's rule, even: the fewer degrees of freedom, the larger k and the steeper the
@@ -49,12 +50,6 @@ function integratedFactor(sampleSize: number, { content, confidence }: Assurance
 	return (low + high) / 2;
 }
 
-interface Strips {
-	readonly from: number;
-	readonly to: number;
-	readonly strips: number;
-}
-
 interface SpreadDensity extends Strips {
 	readonly density: (u: number) => number;
 }
@@ -75,13 +70,4 @@ function spreadDensity(freedom: number): SpreadDensity {
 	const strips = stripsFor(freedom);
 	const whole = simpson(shape, { from, to, strips });
 	return { from, to, strips, density: (u) => shape(u) / whole };
-}
-
-/** Simpson's rule over equal strips. */
-function simpson(f: (u: number) => number, { from, to, strips }: Strips): number {
-	const width = (to - from) / strips;
-	let sum = f(from) + f(to);
-	for (let strip = 1; strip < strips; strip++)
-		sum += (strip % 2 === 1 ? 4 : 2) * f(from + strip * width);
-	return (sum * width) / 3;
 }

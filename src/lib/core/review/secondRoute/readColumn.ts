@@ -17,6 +17,8 @@ export interface PackedBlock {
 /** A device's value at one bias, in SI. */
 export interface DeviceValue {
 	readonly lot: string;
+	/** The independent lot it belongs to. */
+	readonly waferLot: string;
 	readonly wafer: string;
 	readonly device: string;
 	readonly value: number;
@@ -31,11 +33,13 @@ const BYTES = 8;
  * with the mean of its values.
  *
  * @param isLeftOut whether a row of a set is excluded or waits in quarantine
+ * @param waferLots the independent lot of a lot, where it is another
  */
 export function readColumn(
 	blocks: readonly PackedBlock[],
 	bias: number,
-	isLeftOut: (set: number, row: number) => boolean
+	isLeftOut: (set: number, row: number) => boolean,
+	waferLots: ReadonlyMap<string, string> = new Map()
 ): DeviceValue[] {
 	const found = new Map<string, { first: Omit<DeviceValue, 'value'>; values: number[] }>();
 	for (const block of blocks) {
@@ -48,8 +52,14 @@ export function readColumn(
 			const value = view.getFloat64((row * block.grid.length + column) * BYTES, true);
 			if (Number.isNaN(value)) continue;
 			const key = JSON.stringify([lot[row], wafer[row], site[row], element[row], name[row]]);
+			const of = lot[row] ?? '';
 			const entry = found.get(key) ?? {
-				first: { lot: lot[row] ?? '', wafer: wafer[row] ?? '', device: name[row] ?? '' },
+				first: {
+					lot: of,
+					waferLot: waferLots.get(of) ?? of,
+					wafer: wafer[row] ?? '',
+					device: name[row] ?? ''
+				},
 				values: []
 			};
 			entry.values.push(value * block.unitScale);

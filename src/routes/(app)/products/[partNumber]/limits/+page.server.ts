@@ -2,8 +2,8 @@ import { error } from '@sveltejs/kit';
 import { derivationOf, shownSide } from '$lib/components/limits/derivationOf';
 import { gridRow } from '$lib/components/limits/gridRow';
 import { describePolicy, methodText } from '$lib/core/limits/describePolicy';
+import { driftText } from '$lib/core/limits/driftText';
 import { resolutionText } from '$lib/core/limits/resolutionText';
-import { percent } from '$lib/core/limits/digits';
 import { limitMessages } from '$lib/core/messages/limits';
 import { requirePermission } from '$lib/server/auth/requirePermission';
 import { findDistribution } from '$lib/server/db/findDistribution';
@@ -54,7 +54,7 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 			promise: methodText(rules),
 			minimumLots: rules.minimumLots,
 			minimumDevices: rules.minimumDevices,
-			drift: percent(rules.drift),
+			drift: driftText(rules.drift),
 			resolution: resolutionText(rules.resolution, 'units')
 		})),
 		groups: groups.map(({ temperatureCelsius, frequency, unit, rows }) => ({
