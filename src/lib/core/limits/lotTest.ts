@@ -22,12 +22,12 @@ export const LOTS_DIFFER_BELOW = 0.05;
  * One-way analysis of variance between independent lots (wafer lots), from the stored sums; wafers
  * of a lot are taken together. Source: NIST/SEMATECH e-Handbook, section 7.4.3.
  *
- * @returns `undefined` for a single lot, one device a lot, or devices that are all alike
+ * @returns `undefined` for a single lot, one device a lot, devices that are all alike, or some censored
  */
 export function lotTest(distribution: Distribution): LotTest | undefined {
 	const lots = independentLots(distribution);
 	if (lots.length < 2 || distribution.sampleSize <= lots.length) return undefined;
-	if (distribution.standardDeviation === 0) return undefined;
+	if (distribution.standardDeviation === 0 || distribution.censoring !== undefined) return undefined;
 	const { between, within, lot, device, fRatio, pValue } = lotComponents(lots);
 	return {
 		lots: lots.length,

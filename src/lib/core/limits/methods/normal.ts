@@ -1,6 +1,7 @@
 import { limitMessages } from '../../messages/limits';
 import { oneSidedToleranceFactor } from '../../stats/toleranceFactor';
 import { twoSidedToleranceFactor } from '../../stats/twoSidedFactor';
+import { censoredNormal } from './censored';
 import { contentWarning } from './contentWarning';
 import type { Margin, MethodInput, MethodOutcome } from './method';
 import { pooledMean, totalDeviation } from './moments';
@@ -21,6 +22,7 @@ export function normalMethod({ distribution, rules, sides }: MethodInput): Metho
 		return { status: 'refused', message: limitMessages.tooFewDevices(2, sampleSize) };
 	}
 	const promise = promiseOf(rules, sides);
+	if (distribution.censoring !== undefined) return censoredNormal(distribution, sides, promise);
 	const margin: Margin = {
 		kind: 'margin',
 		centre: pooledMean(distribution),
