@@ -7,6 +7,9 @@ import { BIASES, columnOf, devices, FREQUENCY, sweeps } from '../../factories/th
 import { unreachableStorage } from '../../factories/unreachableStorage';
 import { serveApplication, type ServedApplication } from '../servedApplication';
 
+/** SciPy 1.10.1: nct.ppf(0.95, 8, norm.ppf(0.99)*3)/3 */
+const FACTOR_OF_NINE = 4.143022454476868;
+
 const at25 = sweeps(7);
 let served: ServedApplication;
 
@@ -66,7 +69,7 @@ describe('the table over the API', () => {
 			unit: 'pF',
 			temperatureCelsius: 25,
 			frequencyHertz: FREQUENCY,
-			policy: { name: 'Population 99/95', number: 1 }
+			policy: { name: 'Future lots 99/95', number: 1 }
 		});
 		const sorted = columnOf(at25, 4).toSorted((a, b) => a - b);
 		const median = ((sorted[149] ?? 0) + (sorted[150] ?? 0)) / 2;
@@ -124,16 +127,64 @@ describe('the table over the API', () => {
 			policies: { id: number; policy: string; method: string }[];
 		};
 		expect(policies.map(({ policy, method }) => [policy, method])).toEqual([
+			['future-lots-99-95', 'lots'],
 			['population-99-95', 'normal'],
+			['any-shape-99-95', 'order'],
 			['house-four-sigma', 'sigma']
 		]);
 		const sigma = await ask(
-			`${API}?temperatureCelsius=25&biases=4&policy=${policies[1]?.id}&basis=tested`
+			`${API}?temperatureCelsius=25&biases=4&policy=${policies[3]?.id}&basis=tested`
 		);
 		expect(await sigma.json()).toMatchObject({
 			policy: { name: 'House four sigma' },
 			rows: [{ basis: 'tested', refusals: [] }]
 		});
+	});
+});
+
+describe('the preview of limits', () => {
+	const lots = [
+		[14.7, 14.9, 15.0],
+		[15.1, 15.3, 15.2],
+		[14.5, 14.6, 14.8]
+	];
+	const policy = { method: 'normal', content: 0.99, confidence: 0.95, sides: 'maximum' };
+	const preview = (body: unknown, role: 'product_engineer' | 'reader' = 'product_engineer') =>
+		fetch(`${served.url}/api/v1/limits/preview`, {
+			method: 'POST',
+			headers: {
+				authorization: `Bearer ${served.people[role].token}`,
+				'content-type': 'application/json'
+			},
+			body: typeof body === 'string' ? body : JSON.stringify(body)
+		});
+
+	it('answers limits, factors and the way to them', async () => {
+		const response = await preview({ groups: lots, transform: 'ln', policy });
+		expect(response.status).toBe(200);
+		const answer = (await response.json()) as Record<string, unknown>;
+		expect((answer.factors as { maximum: number }).maximum).toBeCloseTo(FACTOR_OF_NINE, 6);
+		expect(answer.minimum).toBeNull();
+		expect((answer.derivation as unknown[]).length).toBeGreaterThan(8);
+	});
+
+	it('refuses with the devices that are needed', async () => {
+		const response = await preview({
+			groups: lots,
+			policy: { ...policy, method: 'order', sides: 'minimum-and-maximum' }
+		});
+		expect(response.status).toBe(422);
+		expect(await response.json()).toMatchObject({ status: 422, requiredSampleSize: 368 });
+	});
+
+	it.each(['{', '{"values":["a"]}'])('says where %s is wrong', async (body) => {
+		const response = await preview(body);
+		expect(response.status).toBe(400);
+		expect(await response.json()).toMatchObject({ detail: limitMessages.notALimitRequest() });
+	});
+
+	it('is not for readers', async () => {
+		expect((await preview({ groups: lots, policy }, 'reader')).status).toBe(403);
 	});
 });
 
@@ -145,7 +196,7 @@ describe('the pages, without JavaScript', () => {
 		expect(link).toBeDefined();
 		const sheet = plain(await page((link ?? '').replaceAll('&amp;', '&')));
 		expect(sheet).toContain('Derivation');
-		expect(sheet).toContain('Factor k₁');
+		expect(sheet).toContain('Factor for future lots');
 		expect(sheet).toContain('Printed minimum');
 		const table = (await (await ask(`${API}?temperatureCelsius=25&biases=4`)).json()) as {
 			rows: { printed: { minimum: string } }[];
