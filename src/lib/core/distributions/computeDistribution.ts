@@ -34,8 +34,8 @@ export interface DistributionInput {
 	readonly uncertainty: number | null;
 	readonly excluded: number;
 	readonly quarantined: number;
-	/** Whether the bias lies between measured ones. Default: false. */
-	readonly interpolated?: boolean;
+	/** V_j in V with which the values were interpolated; left out where the bias was measured. */
+	readonly junctionPotential?: number;
 }
 
 /**
@@ -88,7 +88,8 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 		// Two devices can't lean to a side.
 		skewness: observed.length < 3 ? 0 : skewness(transformed),
 		quantiles: quantilesOf(sorted, censoring),
-		interpolated: input.interpolated ?? false,
+		interpolated: input.junctionPotential !== undefined,
+		...(input.junctionPotential !== undefined && { junctionPotential: input.junctionPotential }),
 		sets: [...input.sets],
 		uncertainty: input.uncertainty,
 		excluded: input.excluded,

@@ -1,20 +1,25 @@
+import { z } from 'zod';
 import { EnteredDistributionError } from './errors';
+import { transform, type Distribution } from './summary';
 import { TRANSFORMS } from './transforms';
-import type { Distribution, Transform } from './summary';
+
+/** The numbers of a distribution without its devices, as they are stored. */
+export const enteredValues = z.object({
+	/** SI unit of the values. */
+	unit: z.string(),
+	transform,
+	/** Devices. */
+	n: z.number().int().min(2),
+	/** Of transformed values: ln of farad for a capacitance. */
+	mean: z.number(),
+	/** Of transformed values, divided by n − 1. */
+	standardDeviation: z.number().nonnegative()
+});
 
 /** What somebody knows of a distribution without its devices. */
-export interface EnteredSummary {
+export interface EnteredSummary extends z.infer<typeof enteredValues> {
 	readonly characteristic: string;
 	readonly conditionKey: string;
-	/** SI unit of the values. */
-	readonly unit: string;
-	readonly transform: Transform;
-	/** Devices. */
-	readonly n: number;
-	/** Of transformed values: ln of farad for a capacitance. */
-	readonly mean: number;
-	/** Of transformed values, divided by n − 1. */
-	readonly standardDeviation: number;
 }
 
 /**
@@ -26,7 +31,7 @@ export interface EnteredSummary {
  *   and the deviation not negative
  */
 export function enteredDistribution(entered: EnteredSummary): Distribution {
-	const { n, mean, standardDeviation, transform } = entered;
+	const { n, mean, standardDeviation } = entered;
 	if (!Number.isInteger(n) || n < 2) throw new EnteredDistributionError('two devices', n);
 	if (!Number.isFinite(mean)) throw new EnteredDistributionError('a finite mean', mean);
 	if (!(standardDeviation >= 0 && Number.isFinite(standardDeviation))) {
@@ -36,14 +41,14 @@ export function enteredDistribution(entered: EnteredSummary): Distribution {
 		characteristic: entered.characteristic,
 		conditionKey: entered.conditionKey,
 		unit: entered.unit,
-		transform,
+		transform: entered.transform,
 		sampleSize: n,
 		independentLots: 0,
 		wafers: 0,
 		mean,
 		standardDeviation,
 		skewness: 0,
-		quantiles: [{ probability: 0.5, value: TRANSFORMS[transform].invert(mean) }],
+		quantiles: [{ probability: 0.5, value: TRANSFORMS[entered.transform].invert(mean) }],
 		interpolated: false,
 		sets: [],
 		uncertainty: null,

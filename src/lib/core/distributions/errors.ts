@@ -48,3 +48,16 @@ export class PackedJointError extends Error {
 		super(`a packed joint distribution requires ${requirement}`);
 	}
 }
+
+/** A junction potential with which the logarithm of V_R + V_j does not exist at the lowest bias. */
+export class InterpolationError extends Error {
+	override readonly name = 'InterpolationError';
+	constructor(
+		readonly junctionPotential: number,
+		readonly lowestBias: number
+	) {
+		super(
+			`interpolation requires a junction potential above ${-lowestBias} V, got ${junctionPotential} V`
+		);
+	}
+}

@@ -101,6 +101,8 @@ export const distributionSummary = z.object({
 	),
 	/** Whether the bias itself was measured, or interpolated within each sweep. */
 	interpolated: z.boolean(),
+	/** V_j in V: interpolated linearly in ln C against ln(V_R + V_j). Absent where measured. */
+	junctionPotential: z.number().positive().optional(),
 	/** The measurement sets behind it. */
 	sets: z.array(z.number().int()),
 	/** The largest uncertainty those sets state, relative; `null` when none states one. */

@@ -1,10 +1,15 @@
 import { and, eq } from 'drizzle-orm';
 import { unpackGroups } from '$lib/core/distributions/packGroups';
+import { readConditionKey } from '$lib/core/distributions/readConditionKey';
 import { distributionSummary, type Distribution } from '$lib/core/distributions/summary';
 import type { Database } from './database';
+import { findEnteredDistributions } from './findEnteredDistributions';
 import { distribution } from './schema';
 
-/** The distribution of a characteristic at one condition, bias included, or `undefined`. */
+/**
+ * The distribution of a characteristic at one condition, bias included: computed, or else entered;
+ * `undefined` when there is neither.
+ */
 export async function findDistribution(
 	db: Database,
 	at: {
@@ -26,5 +31,10 @@ export async function findDistribution(
 			)
 		)
 		.limit(1);
-	return found && { ...distributionSummary.parse(found.summary), ...unpackGroups(found.groups) };
+	if (found) {
+		return { ...distributionSummary.parse(found.summary), ...unpackGroups(found.groups) };
+	}
+	const { temperatureCelsius } = readConditionKey(at.conditionKey);
+	const entered = await findEnteredDistributions(db, { ...at, temperatureCelsius });
+	return entered.find(({ conditionKey }) => conditionKey === at.conditionKey);
 }

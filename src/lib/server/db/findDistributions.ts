@@ -1,9 +1,11 @@
-import { and, eq, like } from 'drizzle-orm';
+import { and, eq, inArray, like, sql } from 'drizzle-orm';
+import type { Condition } from '$lib/core/characteristics/condition';
+import { unpackGroups } from '$lib/core/distributions/packGroups';
 import { readConditionKey } from '$lib/core/distributions/readConditionKey';
 import { distributionSummary, type Distribution } from '$lib/core/distributions/summary';
-import { unpackGroups } from '$lib/core/distributions/packGroups';
-import type { Condition } from '$lib/core/characteristics/condition';
+import { usableEntered } from '$lib/core/distributions/usableEntered';
 import type { Database } from './database';
+import { findEnteredDistributions } from './findEnteredDistributions';
 import { distribution } from './schema';
 
 export interface StoredDistribution {
@@ -11,7 +13,13 @@ export interface StoredDistribution {
 	readonly distribution: Distribution;
 }
 
-/** The distributions of a characteristic at one temperature, at every frequency and bias. */
+/** Which of the biases between measured ones are wanted, too: none, some in V, or all stored. */
+export type InterpolatedWanted = readonly number[] | 'all';
+
+/**
+ * The distributions of a characteristic at one temperature, at every frequency and bias: measured,
+ * and entered where nothing is; interpolated ones only where asked for.
+ */
 export async function findDistributions(
 	db: Database,
 	at: {
@@ -19,10 +27,17 @@ export async function findDistributions(
 		readonly basisHash: string;
 		readonly characteristic: string;
 		readonly temperatureCelsius: number;
+		/** Default: none. */
+		readonly interpolated?: InterpolatedWanted;
 	}
 ): Promise<StoredDistribution[]> {
-	const stored = await db
-		.select()
+	const { interpolated: wanted = [] } = at;
+	const keys = await db
+		.select({
+			id: distribution.id,
+			conditionKey: distribution.conditionKey,
+			isInterpolated: sql<number>`json_extract(${distribution.summary}, '$.interpolated')`
+		})
 		.from(distribution)
 		.where(
 			and(
@@ -32,13 +47,25 @@ export async function findDistributions(
 				like(distribution.conditionKey, `T=${at.temperatureCelsius};%`)
 			)
 		);
-	return stored
-		.map((row) => ({
-			condition: readConditionKey(row.conditionKey),
-			distribution: {
-				...distributionSummary.parse(row.summary),
-				...unpackGroups(row.groups)
-			}
-		}))
+	const ids = keys.flatMap(({ id, conditionKey, isInterpolated }) => {
+		const isWanted =
+			isInterpolated === 0 || wanted === 'all' || wanted.includes(biasOf(conditionKey));
+		return isWanted ? [id] : [];
+	});
+	const stored = await db.select().from(distribution).where(inArray(distribution.id, ids));
+	const computed = stored.map((row): Distribution => ({
+		...distributionSummary.parse(row.summary),
+		...unpackGroups(row.groups)
+	}));
+	const entered = usableEntered(
+		await findEnteredDistributions(db, at),
+		keys.filter(({ isInterpolated }) => isInterpolated === 0).map((key) => key.conditionKey)
+	);
+	return [...computed, ...entered]
+		.map((of) => ({ condition: readConditionKey(of.conditionKey), distribution: of }))
 		.sort((a, b) => (a.condition.reverseVoltage ?? 0) - (b.condition.reverseVoltage ?? 0));
+}
+
+function biasOf(conditionKey: string): number {
+	return readConditionKey(conditionKey).reverseVoltage ?? Number.NaN;
 }

@@ -1,4 +1,4 @@
-import { and, eq } from 'drizzle-orm';
+import { and, eq, sql } from 'drizzle-orm';
 import { readConditionKey } from '$lib/core/distributions/readConditionKey';
 import type { Database } from './database';
 import { distribution } from './schema';
@@ -10,7 +10,7 @@ export interface MeasuredConditions {
 	readonly biases: readonly number[];
 }
 
-/** Where a characteristic of a product has distributions, of the basis given. */
+/** Where a characteristic of a product was measured, of the basis given: nothing interpolated. */
 export async function findMeasuredConditions(
 	db: Database,
 	at: { readonly product: number; readonly basisHash: string; readonly characteristic: string }
@@ -22,7 +22,8 @@ export async function findMeasuredConditions(
 			and(
 				eq(distribution.product, at.product),
 				eq(distribution.characteristic, at.characteristic),
-				eq(distribution.basisHash, at.basisHash)
+				eq(distribution.basisHash, at.basisHash),
+				sql`json_extract(${distribution.summary}, '$.interpolated') = 0`
 			)
 		);
 	const found = new Map<

@@ -1,0 +1,151 @@
+import { and, eq, sql } from 'drizzle-orm';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { curveCovariance, momentsOfPair } from '$lib/core/distributions/jointDistribution';
+import { lineFromMoments, regressionLine } from '$lib/core/stats/regressionLine';
+import type { OpenDatabase } from '$lib/server/db/client';
+import { findDistribution } from '$lib/server/db/findDistribution';
+import { findDistributions, type InterpolatedWanted } from '$lib/server/db/findDistributions';
+import { findJointDistribution } from '$lib/server/db/findJointDistribution';
+import { findMeasuredConditions } from '$lib/server/db/findMeasuredConditions';
+import { distribution, product } from '$lib/server/db/schema';
+import { write } from '$lib/server/db/write';
+import { computeDistributions } from '$lib/server/services/computeDistributions';
+import { ensureTemplates } from '$lib/server/services/ensureTemplates';
+import { insertAcceptedSet, insertProduct } from '../factories/acceptedSet';
+import { openTestDatabase } from '../factories/testDatabase';
+import { BIASES, columnOf, devices, FREQUENCY, SWEEP_KEY, sweeps } from '../factories/threeLots';
+import { unreachableStorage } from '../factories/unreachableStorage';
+
+const at25 = sweeps(7);
+let opened: OpenDatabase;
+let productId = 0;
+let scope = { product: 0, basisHash: '', characteristic: 'C_tot' };
+
+const compute = (payload: object) =>
+	computeDistributions(
+		{ db: opened.db, storage: unreachableStorage },
+		{ product: productId, ...payload },
+		{ id: 1, attempt: 1, report: () => undefined, isCurrent: () => Promise.resolve(true) }
+	);
+
+const biasesAt = async (interpolated?: InterpolatedWanted) => {
+	const found = await findDistributions(opened.db, {
+		...scope,
+		temperatureCelsius: 25,
+		...(interpolated && { interpolated })
+	});
+	return found.map(({ condition }) => condition.reverseVoltage);
+};
+
+beforeAll(async () => {
+	opened = await openTestDatabase();
+	await ensureTemplates({ db: opened.db }, 'templates');
+	productId = await insertProduct(opened.db);
+	await insertAcceptedSet(opened.db, {
+		product: productId,
+		sha256: 'a'.repeat(64),
+		uncertainty: 0.003,
+		devices,
+		biases: BIASES,
+		frequency: FREQUENCY,
+		picofarads: new Map([[25, at25]])
+	});
+	await compute({});
+	const [owner] = await opened.db.select().from(product).where(eq(product.id, productId));
+	scope = { ...scope, product: productId, basisHash: owner?.basisHash ?? '' };
+});
+afterAll(() => opened.close());
+
+describe('biases between those that were measured', () => {
+	// The tuning template asks for 0.5, 1, 2, 3, 4, 6, 8, 10 … 28 V; measured are 0, 1, 4 and 10 V.
+	const BETWEEN = [0.5, 2, 3, 6, 8];
+
+	it('have distributions where the template of the class asks for them, found when asked', async () => {
+		expect(await biasesAt()).toEqual(BIASES);
+		expect(await biasesAt([2, 6, 12])).toEqual([0, 1, 2, 4, 6, 10]);
+		expect(await biasesAt('all')).toEqual([...BIASES, ...BETWEEN].sort((a, b) => a - b));
+		const [conditions] = await findMeasuredConditions(opened.db, scope);
+		expect(conditions?.biases).toEqual(BIASES);
+	});
+
+	it('hold every device, each interpolated in its own sweep', async () => {
+		const found = await findDistribution(opened.db, {
+			...scope,
+			conditionKey: `${SWEEP_KEY};VR=2`
+		});
+		expect(found).toMatchObject({ interpolated: true, sampleSize: 300, independentLots: 3 });
+		const potential = found?.junctionPotential ?? 0;
+		expect(potential).toBeGreaterThan(0.05);
+
+		// By hand: each device on the straight line between its readings at 1 V and 4 V.
+		const [left, right] = [columnOf(at25, 1), columnOf(at25, 4)];
+		const x = (bias: number) => Math.log(bias + potential);
+		const part = (x(2) - x(1)) / (x(4) - x(1));
+		const y = [...left].map((value, device) => {
+			const [a, b] = [Math.log(value * 1e-12), Math.log((right[device] ?? 0) * 1e-12)];
+			return a + part * (b - a);
+		});
+		const mean = y.reduce((sum, value) => sum + value, 0) / 300;
+		const squares = y.reduce((sum, value) => sum + (value - mean) ** 2, 0);
+		expect(found?.mean).toBeCloseTo(mean, 11);
+		expect(found?.standardDeviation).toBeCloseTo(Math.sqrt(squares / 299), 11);
+	});
+
+	it('are computed for further biases when a job names them, and never beyond the range', async () => {
+		await compute({ biases: [7.5, 11, -1] });
+		const all = await biasesAt('all');
+		expect(all).toContain(7.5);
+		expect(all).not.toContain(11);
+		expect(all).not.toContain(-1);
+	});
+
+	it('become a dense band when a job asks for one', async () => {
+		await compute({ isBand: true });
+		const all = await biasesAt('all');
+		// 4 measured, 5 of the template, 7.5 V, and at most 40 of the band.
+		expect(all.length).toBeGreaterThan(40);
+		expect(all.length).toBeLessThanOrEqual(50);
+		expect(await biasesAt()).toEqual(BIASES);
+	});
+});
+
+describe('how biases vary together', () => {
+	it('is stored, and gives the line that the devices give', async () => {
+		const joint = (await findJointDistribution(opened.db, { ...scope, conditionKey: SWEEP_KEY }))!;
+		expect(joint.biases).toEqual(BIASES);
+		expect(joint.lotSizes).toEqual([100, 100, 100]);
+		expect(curveCovariance(joint)).toMatchObject({ points: 4, lots: 3, withinDegrees: 297 });
+
+		const ln = (bias: number) => columnOf(at25, bias).map((value) => Math.log(value * 1e-12));
+		const ofDevices = regressionLine(ln(10), ln(1));
+		const ofMoments = lineFromMoments(momentsOfPair(joint, 10, 1)!);
+		expect(ofMoments.slope).toBeCloseTo(ofDevices.slope, 9);
+		expect(ofMoments.intercept).toBeCloseTo(ofDevices.intercept, 8);
+		expect(ofMoments.residualDeviation).toBeCloseTo(ofDevices.residualDeviation, 11);
+	});
+
+	it('is unknown at a temperature that was not measured', async () => {
+		const at = { ...scope, conditionKey: 'T=85;f=1000000' };
+		expect(await findJointDistribution(opened.db, at)).toBeUndefined();
+	});
+});
+
+it('reads rows that were stored before origin, normality and components were kept', async () => {
+	const key = `${SWEEP_KEY};VR=4`;
+	await write(opened.db, (tx) =>
+		tx
+			.update(distribution)
+			.set({
+				summary: sql`json_remove(${distribution.summary}, '$.origin', '$.normality', '$.components')`
+			})
+			.where(and(eq(distribution.product, productId), eq(distribution.conditionKey, key)))
+	);
+	const found = await findDistribution(opened.db, { ...scope, conditionKey: key });
+	expect(found).toMatchObject({
+		origin: 'measured',
+		normality: null,
+		components: null,
+		sampleSize: 300
+	});
+	expect(found).not.toHaveProperty('censoring');
+});
