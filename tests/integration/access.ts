@@ -103,6 +103,7 @@ export const ACCESS: Readonly<Record<string, Access>> = {
 	'/api/v1/jobs/[job] GET': 'measurement.read',
 	'/api/v1/junction/fit POST': 'limit.read',
 	'/api/v1/limits/preview POST': 'limit.read',
+	'/api/v1/limits/screened POST': 'limit.read',
 	'/api/v1/policies GET': 'policy.read',
 	'/api/v1/products GET': 'product.read',
 	'/api/v1/products/[partNumber] GET': 'product.read',
