@@ -1,3 +1,4 @@
+import { groupBy } from '../groupBy';
 import type { BiasColumn } from './conditionColumns';
 import type { GroupName } from './indexDevices';
 import type { JointDistribution } from './jointDistribution';
@@ -20,10 +21,10 @@ export interface JointInput {
 	readonly groups: readonly GroupName[];
 }
 
-/** Devices with a value at every bias, row by row, lot by lot. */
+/** Devices with a value at every bias, packed row by row, lot by lot. */
 interface CompleteRows {
 	readonly biases: readonly number[];
-	readonly rows: readonly Float64Array[];
+	readonly rows: Float64Array;
 	/** How many rows each independent lot has, in the order of the rows. */
 	readonly lotSizes: readonly number[];
 }
@@ -39,22 +40,22 @@ interface CompleteRows {
  * @returns `undefined` for fewer than two complete devices
  */
 export function computeJointDistribution(input: JointInput): JointDistribution | undefined {
-	const complete = completeRows(input);
-	const { biases, rows, lotSizes } = complete;
-	if (rows.length < 2) return undefined;
-
+	const { biases, rows, lotSizes } = completeRows(input);
 	const points = biases.length;
+	const devices = lotSizes.reduce((sum, size) => sum + size, 0);
+	if (points === 0 || devices < 2) return undefined;
+
 	const lotMeans = new Float64Array(lotSizes.length * points);
 	const withinLots = new Float64Array(points * points);
 	let first = 0;
 	for (const [lot, size] of lotSizes.entries()) {
-		const devices = rows.slice(first, first + size);
-		const means = meansOf(devices, points);
-		lotMeans.set(means, lot * points);
-		addProducts(withinLots, devices, means);
+		const ofLot = rows.subarray(first * points, (first + size) * points);
+		const means = lotMeans.subarray(lot * points, (lot + 1) * points);
+		centre(ofLot, means);
+		addProducts(withinLots, ofLot, points);
 		first += size;
 	}
-	const degrees = rows.length - lotSizes.length;
+	const degrees = devices - lotSizes.length;
 	if (degrees > 0) for (const [i, sum] of withinLots.entries()) withinLots[i] = sum / degrees;
 	return {
 		characteristic: input.characteristic,
@@ -72,61 +73,62 @@ function completeRows({ columns, groupOf, groups, transform }: JointInput): Comp
 	const counts = columns.map(({ values }) => countPresent(values));
 	const most = Math.max(0, ...counts);
 	const used = columns.filter((_, column) => (counts[column] ?? 0) >= COVERAGE * most);
-	const { apply } = TRANSFORMS[transform];
-	const lots = new Map<string, Float64Array[]>();
-	const devices = used[0]?.values.length ?? 0;
-	for (let device = 0; device < devices; device++) {
-		if (used.some(({ values }) => Number.isNaN(values[device]))) continue;
-		const row = Float64Array.from(used, ({ values }) => apply(values[device] ?? Number.NaN));
-		const lot = groups[groupOf[device] ?? -1]?.waferLot ?? '';
-		const rows = lots.get(lot);
-		if (rows) rows.push(row);
-		else lots.set(lot, [row]);
-	}
+	const transformed = used.map(({ values }) => values.map(TRANSFORMS[transform].apply));
+	const lots = groupBy(
+		[...groupOf.keys()].filter((device) =>
+			transformed.every((values) => !Number.isNaN(values[device]))
+		),
+		(device) => groups[groupOf[device] ?? -1]?.waferLot ?? ''
+	);
 	const ordered = [...lots]
 		.sort(([a], [b]) => (a < b ? -1 : 1))
-		.map(([, rows]) => rows.sort(byValues));
+		.map(([, devices]) => devices.sort((a, b) => byValues(transformed, a, b)));
+	const rows = new Float64Array(ordered.flat().length * used.length);
+	for (const [row, device] of ordered.flat().entries()) {
+		for (let p = 0; p < used.length; p++) rows[row * used.length + p] = transformed[p]![device]!;
+	}
 	return {
 		biases: used.map(({ bias }) => bias),
-		rows: ordered.flat(),
-		lotSizes: ordered.map((rows) => rows.length)
+		rows,
+		lotSizes: ordered.map((devices) => devices.length)
 	};
 }
 
 function countPresent(values: Float64Array): number {
 	let count = 0;
-	for (const value of values) if (!Number.isNaN(value)) count++;
+	for (let i = 0; i < values.length; i++) if (!Number.isNaN(values[i])) count++;
 	return count;
 }
 
-function byValues(a: Float64Array, b: Float64Array): number {
-	for (let p = 0; p < a.length; p++) {
-		const difference = a[p]! - b[p]!;
+function byValues(columns: readonly Float64Array[], a: number, b: number): number {
+	for (const values of columns) {
+		const difference = values[a]! - values[b]!;
 		if (difference !== 0) return difference;
 	}
 	return 0;
 }
 
-/** Mean at each point, with a second pass for what rounding left over. */
-function meansOf(rows: readonly Float64Array[], points: number): Float64Array {
-	const means = new Float64Array(points);
+/** Takes the mean at each point off all rows, in two passes for what rounding leaves over. */
+function centre(rows: Float64Array, means: Float64Array): void {
+	const points = means.length;
+	const count = rows.length / points;
 	for (let pass = 0; pass < 2; pass++) {
-		const rest = new Float64Array(points);
-		for (const row of rows) for (let p = 0; p < points; p++) rest[p]! += row[p]! - means[p]!;
-		for (let p = 0; p < points; p++) means[p]! += rest[p]! / rows.length;
+		for (let p = 0; p < points; p++) {
+			let sum = 0;
+			for (let i = p; i < rows.length; i += points) sum += rows[i]!;
+			const mean = sum / count;
+			for (let i = p; i < rows.length; i += points) rows[i]! -= mean;
+			means[p]! += mean;
+		}
 	}
-	return means;
 }
 
-/** Adds Σ (y − mean)(y − mean)ᵀ, both triangles. */
-function addProducts(sums: Float64Array, rows: readonly Float64Array[], means: Float64Array): void {
-	const points = means.length;
-	const off = new Float64Array(points);
-	for (const row of rows) {
-		for (let p = 0; p < points; p++) off[p] = row[p]! - means[p]!;
+/** Adds Σ y yᵀ over the rows, both triangles. */
+function addProducts(sums: Float64Array, rows: Float64Array, points: number): void {
+	for (let first = 0; first < rows.length; first += points) {
 		for (let p = 0; p < points; p++) {
-			const factor = off[p]!;
-			for (let q = 0; q <= p; q++) sums[p * points + q]! += factor * off[q]!;
+			const factor = rows[first + p]!;
+			for (let q = 0; q <= p; q++) sums[p * points + q]! += factor * rows[first + q]!;
 		}
 	}
 	for (let p = 0; p < points; p++)

@@ -19,17 +19,17 @@ export function withinLotNormality(
 	const lots = groupBy(members, ({ name }) => name.waferLot);
 	const residuals = residualsWithinLots([...lots.values()].map((lot) => transformedOf(lot, apply)));
 	if (residuals.length < FEWEST_RESIDUALS || standardDeviation(residuals) === 0) return null;
-	const { adjusted, pValue } = andersonDarling(residuals.sort());
+	const { adjusted, pValue } = andersonDarling(residuals);
 	return { statistic: adjusted, pValue };
 }
 
-/** The values of all wafers of a lot, ascending: sums over them don't depend on their order. */
+/** The values of all wafers of a lot, wafer by wafer. */
 function transformedOf(lot: readonly Members[], apply: (value: number) => number): Float64Array {
 	const all = new Float64Array(lot.reduce((size, { sorted }) => size + sorted.length, 0));
 	let filled = 0;
 	for (const { sorted } of lot) {
-		all.set(sorted, filled);
+		all.set(sorted.map(apply), filled);
 		filled += sorted.length;
 	}
-	return all.sort().map(apply);
+	return all;
 }

@@ -1,6 +1,7 @@
 import { SampleTooSmallError, OutsideDomainError } from './errors';
 import { logNormalLowerTail } from './logNormalTail';
 import { mean } from './mean';
+import { normalUpperTail } from './normalDistribution';
 import { standardDeviation } from './standardDeviation';
 
 export interface AndersonDarling {
@@ -43,11 +44,18 @@ export function andersonDarling(values: ArrayLike<number>): AndersonDarling {
 	const centre = mean(values);
 	const deviation = standardDeviation(values);
 	if (!(deviation > 0)) throw new OutsideDomainError('andersonDarling', 'a spread', deviation);
-	const z = Float64Array.from(values, (value) => (value - centre) / deviation).sort();
+	const z = new Float64Array(count);
+	for (let i = 0; i < count; i++) z[i] = (values[i]! - centre) / deviation;
+	z.sort();
 	let sum = 0;
 	for (let i = 0; i < count; i++) {
-		const logs = logNormalLowerTail(z[i]!) + logNormalLowerTail(-z[count - 1 - i]!);
-		sum += (2 * i + 1) * logs;
+		// The smaller tail gives the larger one: each value costs one tail instead of two.
+		const distance = Math.abs(z[i]!);
+		const tail = normalUpperTail(distance);
+		const smaller = tail > 0 ? Math.log(tail) : logNormalLowerTail(-distance);
+		const larger = Math.log1p(-tail);
+		const [below, above] = [2 * i + 1, 2 * (count - i) - 1];
+		sum += z[i]! < 0 ? below * smaller + above * larger : below * larger + above * smaller;
 	}
 	const statistic = -count - sum / count;
 	const adjusted = statistic * (1 + 0.75 / count + 2.25 / (count * count));
