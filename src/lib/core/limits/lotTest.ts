@@ -27,7 +27,8 @@ export const LOTS_DIFFER_BELOW = 0.05;
 export function lotTest(distribution: Distribution): LotTest | undefined {
 	const lots = independentLots(distribution);
 	if (lots.length < 2 || distribution.sampleSize <= lots.length) return undefined;
-	if (distribution.standardDeviation === 0 || distribution.censoring !== undefined) return undefined;
+	if (distribution.standardDeviation === 0 || distribution.censoring !== undefined)
+		return undefined;
 	const { between, within, lot, device, fRatio, pValue } = lotComponents(lots);
 	return {
 		lots: lots.length,

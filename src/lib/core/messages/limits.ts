@@ -93,6 +93,18 @@ export const limitMessages = {
 		`${plural(count, 'sweep')} ${count === 1 ? 'waits' : 'wait'} in quarantine and ${count === 1 ? 'is' : 'are'} left out until a verdict is given.`,
 	uncertaintyNotStated: () =>
 		'No set states its uncertainty, so nothing is added for it; a systematic error of the tester would pass into the limit.',
+	contradicted: (
+		side: 'minimum' | 'maximum',
+		limit: string,
+		of: { readonly outside: number; readonly allowed: number; readonly sampleSize: number }
+	) =>
+		`${of.outside} of ${plural(of.sampleSize, 'device')} ${of.outside === 1 ? 'lies' : 'lie'} beyond the ${side} of ${limit}; its basis allows ${of.allowed}. Ask first what becomes of the lot.`,
+	noLongerComputed: (side: 'minimum' | 'maximum', why: string) =>
+		`The ${side} can no longer be computed. ${why}`,
+	unsupported: (side: 'minimum' | 'maximum', limit: string, now: string) =>
+		`The data of today supports a ${side} of ${now} only, looser than the published ${limit}.`,
+	moved: (side: 'minimum' | 'maximum', limit: string, now: string) =>
+		`The ${side} would be ${now} today; ${limit} is published.`,
 	equalsTypical: (side: 'minimum' | 'maximum') =>
 		`The ${side} equals the typical value at this resolution.`,
 	rises: (
