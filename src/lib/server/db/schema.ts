@@ -607,6 +607,18 @@ export const releaseFile = sqliteTable(
 	(table) => [primaryKey({ columns: [table.release, table.name] })]
 );
 
+/** What the data of today makes of a published release: one row a release, written anew. */
+export const releaseAssessment = sqliteTable('release_assessment', {
+	release: integer()
+		.primaryKey()
+		.references(() => release.id, { onDelete: 'cascade' }),
+	/** Hash of the sets and verdicts it was judged by. */
+	basisHash: text().notNull(),
+	/**  of core: rows that no longer hold, each with its state and sentence. */
+	rows: text({ mode: 'json' }).notNull(),
+	at: text().notNull()
+});
+
 // 11 · Work and records
 
 export const job = sqliteTable(
