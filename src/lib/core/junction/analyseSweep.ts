@@ -77,13 +77,14 @@ function spiceText(
 	{ model, residualRms }: CapacitanceFit,
 	{ temperature = ROOM_TEMPERATURE }: SweepRequest
 ): string {
-	const share = Number((residualRms * 100).toPrecision(2));
+	const percent = residualRms * 100;
+	const residual = percent < 0.001 ? 'below 0.001' : String(Number(percent.toPrecision(2)));
 	return spiceModel({
 		name: SPICE_NAME,
 		capacitance: model,
 		nominalCelsius: temperature - ZERO_CELSIUS,
 		notes: [
-			`${biases.length} readings from ${biases[0]} V to ${biases.at(-1)} V reverse bias, residual ${share} percent rms`,
+			`${biases.length} readings from ${biases[0]} V to ${biases.at(-1)} V reverse bias, residual ${residual} percent rms`,
 			'current, breakdown and transit time are defaults of the model, not measured'
 		]
 	});
