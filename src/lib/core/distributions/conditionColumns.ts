@@ -44,19 +44,23 @@ export class ConditionColumns {
 		const { grid, values, unitScale } = matrix;
 		const devices = this.#devices.devicesOf.get(matrix.set);
 		if (devices === undefined) return;
-		const columns = grid.map((bias) => this.#column(bias));
-		const rows = values.length / grid.length;
-		for (let r = 0; r < rows; r++) {
+		const points = grid.length;
+		const deviceOfRow = Int32Array.from({ length: values.length / points }, (_, r) => {
 			const row = matrix.firstRow + r;
-			const device = devices[row] ?? -1;
-			if (device < 0 || isLeftOut(row)) continue;
-			for (const [position, column] of columns.entries()) {
-				const value = values[r * grid.length + position] ?? Number.NaN;
-				if (Number.isNaN(value)) continue;
-				column.sums[device] = (column.sums[device] ?? 0) + value * unitScale;
-				column.counts[device] = (column.counts[device] ?? 0) + 1;
-				column.sets.add(matrix.set);
+			return isLeftOut(row) ? -1 : (devices[row] ?? -1);
+		});
+		for (const [position, bias] of grid.entries()) {
+			const { sums, counts, sets } = this.#column(bias);
+			let isUsed = false;
+			for (let r = 0; r < deviceOfRow.length; r++) {
+				const device = deviceOfRow[r]!;
+				const value = values[r * points + position]!;
+				if (device < 0 || Number.isNaN(value)) continue;
+				sums[device]! += value * unitScale;
+				counts[device]! += 1;
+				isUsed = true;
 			}
+			if (isUsed) sets.add(matrix.set);
 		}
 	}
 
