@@ -13,7 +13,10 @@ export const worklistMessages = {
 		readonly publish: boolean;
 	}): string[] => [
 		...(may.giveVerdicts
-			? ['Devices in quarantine, files to map, and revisions that come back to you.']
+			? [
+					'Published limits that newer data contradicts or no longer supports.',
+					'Devices in quarantine, files to map, and revisions that come back to you.'
+				]
 			: []),
 		...(may.verify ? ['Revisions to verify, except those you had a hand in.'] : []),
 		...(may.publish ? ['Approved revisions, to publish.'] : []),
@@ -38,6 +41,11 @@ export const worklistMessages = {
 		`${ticked} of ${count(rows, 'row')} verified${flagged === 0 ? '' : `, ${flagged} flagged`}.`,
 	toPublish: (number: number, name: string) => `Revision ${number}, approved by ${name}.`,
 	toPublishNote: (name: string) => `Submitted by ${name}. Publishing gives it a version and a day.`,
+	limits: (size: number) => count(size, 'limit'),
+	contradicted: (version: string, limits: number) =>
+		`Version ${version}: newer devices contradict ${count(limits, 'published limit')}.`,
+	unsupported: (version: string, limits: number) =>
+		`Version ${version}: newer data no longer supports ${count(limits, 'published limit')}.`,
 	failed: (what: string) => `${what} did not finish.`
 };
 
@@ -46,6 +54,7 @@ const JOB_NAMES: Readonly<Record<string, string>> = {
 	'read-upload': 'Reading a file',
 	'import-measurement-set': 'Importing a measurement set',
 	'compute-distributions': 'Computing the distributions',
+	'assess-releases': 'Comparing published limits with newer data',
 	'render-proof': 'Drawing a proof',
 	'verify-evidence': 'Gathering the evidence of a revision',
 	'publish-release': 'Publishing a release'

@@ -614,7 +614,7 @@ export const releaseAssessment = sqliteTable('release_assessment', {
 		.references(() => release.id, { onDelete: 'cascade' }),
 	/** Hash of the sets and verdicts it was judged by. */
 	basisHash: text().notNull(),
-	/**  of core: rows that no longer hold, each with its state and sentence. */
+	/** `assessedRows` of core: what no longer holds, each with its state and sentence. */
 	rows: text({ mode: 'json' }).notNull(),
 	at: text().notNull()
 });

@@ -12,6 +12,7 @@ import type { Connection } from '../db/database';
 import { distribution, jointDistribution, product } from '../db/schema';
 import { write } from '../db/write';
 import type { JobContext, JobHandler } from '../work/jobHandler';
+import { enqueueAssessment } from './assessReleases';
 import { conditionDistributions } from './conditionDistributions';
 import { readBasis, type Basis } from './readBasis';
 import { readDevices, sweepConditions } from './readSweeps';
@@ -132,6 +133,7 @@ async function complete(
 		if (now.completeHash === basisHash) return true;
 
 		await tx.update(product).set({ basisHash }).where(eq(product.id, productId));
+		if (basisHash !== null) await enqueueAssessment(tx, productId, basisHash);
 		await appendAudit(tx, {
 			action: 'distributions.compute',
 			subject: basis.inputs.partNumber,

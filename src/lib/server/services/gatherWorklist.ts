@@ -1,8 +1,10 @@
+import { versionText } from '$lib/core/datasheet/record';
 import { jobName, worklistMessages as say } from '$lib/core/messages/worklist';
 import { isPermitted } from '$lib/core/review/permissions';
 import { mayDecide, mayPublish, type Actor } from '$lib/core/review/separation';
 import type { Database } from '../db/database';
 import { findJobProduct } from '../db/findJobProduct';
+import { listAssessments } from '../db/listAssessments';
 import { listFailedJobs } from '../db/listFailedJobs';
 import { listOpenRevisions, type ListedOpenRevision } from '../db/listOpenRevisions';
 import { listQuarantines } from '../db/listQuarantines';
@@ -28,6 +30,9 @@ export interface WorklistGroup {
 	readonly items: readonly WorklistItem[];
 }
 
+/** As many limits of a release are named in its line. */
+const NAMED_LIMITS = 2;
+
 /** Failures older than this are history. */
 const FAILURES_FOR_DAYS = 7;
 
@@ -45,7 +50,9 @@ export async function gatherWorklist(
 	const isProductEngineer = isPermitted(person.roles, 'verdict.give');
 	const revisions = await listOpenRevisions(db);
 	const groups = [
-		...(isProductEngineer ? [await quarantines(db), await uploads(db)] : []),
+		...(isProductEngineer
+			? [...(await published(db)), await quarantines(db), await uploads(db)]
+			: []),
 		await returned(db, person.id),
 		toVerify(revisions, person),
 		toPublish(revisions, person),
@@ -59,6 +66,36 @@ export const countWaiting = (groups: readonly WorklistGroup[]): number =>
 	groups.reduce((sum, { items }) => sum + items.length, 0);
 
 const productPath = (partNumber: string) => `/products/${encodeURIComponent(partNumber)}`;
+
+/** Only what speaks against a limit waits; one that merely moved doesn't. */
+async function published(db: Database): Promise<WorklistGroup[]> {
+	const assessments = await listAssessments(db);
+	const groupOf = (state: 'contradicted' | 'unsupported', title: string): WorklistGroup => {
+		const found = assessments.flatMap(({ rows, ...of }) => {
+			const concerned = rows.filter((row) => row.state === state);
+			return concerned.length === 0 ? [] : [{ ...of, concerned }];
+		});
+		return {
+			title,
+			amount: say.limits(found.reduce((sum, { concerned }) => sum + concerned.length, 0)),
+			items: found.map(({ partNumber, version, at, concerned }) => ({
+				partNumber,
+				text: say[state](versionText(version), concerned.length),
+				note: concerned
+					.slice(0, NAMED_LIMITS)
+					.map(({ label, text }) => `${label}: ${text}`)
+					.join(' '),
+				since: at,
+				href: `${productPath(partNumber)}/limits`,
+				action: 'See the limits'
+			}))
+		};
+	};
+	return [
+		groupOf('contradicted', 'Published limits contradicted'),
+		groupOf('unsupported', 'Published limits no longer supported')
+	];
+}
 
 async function quarantines(db: Database): Promise<WorklistGroup> {
 	const found = await listQuarantines(db);

@@ -1,3 +1,4 @@
+import { assessReleases } from '../services/assessReleases';
 import { computeDistributions } from '../services/computeDistributions';
 import { importMeasurementSet } from '../services/importMeasurementSet';
 import { publishReleaseJob } from '../services/publishReleaseJob';
@@ -11,6 +12,7 @@ export const handlers: Readonly<Record<string, JobHandler>> = {
 	'read-upload': readUpload,
 	'import-measurement-set': importMeasurementSet,
 	'compute-distributions': computeDistributions,
+	'assess-releases': assessReleases,
 	'verify-evidence': verifyEvidence,
 	'render-proof': renderProof,
 	'publish-release': publishReleaseJob
