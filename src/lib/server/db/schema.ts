@@ -403,6 +403,14 @@ export const enteredDistribution = sqliteTable(
 	(table) => [index('entered_distribution_by_product').on(table.product, table.characteristic)]
 );
 
+/** By how much limits at each bias are widened to hold along the curve: simulated, and kept. */
+export const curveWidening = sqliteTable('curve_widening', {
+	/** Hash of the covariances, the promise and the engine. */
+	inputHash: text().primaryKey(),
+	/** `curveWidening` of core. */
+	result: text({ mode: 'json' }).notNull()
+});
+
 /** A computed limit, kept under everything it depends on. */
 export const limitMemo = sqliteTable(
 	'limit_memo',

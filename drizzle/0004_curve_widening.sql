@@ -1,0 +1,4 @@
+CREATE TABLE `curve_widening` (
+	`inputHash` text PRIMARY KEY NOT NULL,
+	`result` text NOT NULL
+);
