@@ -16,7 +16,8 @@ export default defineConfig({
 				worker: 'src/lib/server/work/worker.ts',
 				seed: 'src/tasks/seed.ts',
 				token: 'src/tasks/token.ts',
-				generate: 'src/tasks/generate.ts'
+				generate: 'src/tasks/generate.ts',
+				confidence: 'src/tasks/confidence.ts'
 			}
 		}
 	}

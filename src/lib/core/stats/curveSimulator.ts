@@ -1,7 +1,8 @@
+import { choleskyRoot, rowSquare } from './choleskyRoot';
 import { coveringHalfWidth } from './coveringHalfWidth';
 import { normalQuantile } from './normalQuantile';
-import { quantile } from './quantile';
 import type { RandomSource } from './randomSource';
+import { selectQuantile } from './selectQuantile';
 
 /** What is known of a curve: covariance across its points, between lot means and within lots. */
 export interface CurveCovariance {
@@ -20,6 +21,9 @@ export interface CurveCovariance {
 /** Which side of a band a device must not cross. */
 export type BandSides = 'minimum' | 'maximum' | 'both';
 
+/** How far a limit reaches from the variance of lot means and that within lots. */
+export type MarginOf = (ofLotMeans: number, withinLots: number) => number;
+
 /** Draws samples and future devices of a curve, in deviations from its true mean. */
 export class CurveSimulator {
 	private readonly points: number;
@@ -27,13 +31,16 @@ export class CurveSimulator {
 	private readonly withinRoot: Float64Array;
 	private readonly betweenRoot: Float64Array;
 	private readonly trueDeviation: Float64Array;
-	/** Mean and deviation of the drawn sample at each point. */
+	/** Mean and margin of the drawn sample at each point, and the variances behind the margin. */
 	private readonly sampleMean: Float64Array;
-	private readonly sampleDeviation: Float64Array;
+	private readonly sampleMargin: Float64Array;
+	private readonly ofLotMeans: Float64Array;
+	private readonly withinLots: Float64Array;
 	private readonly triangle: Float64Array;
 
 	constructor(
 		private readonly curve: CurveCovariance,
+		private readonly marginOf: MarginOf,
 		private readonly normal: RandomSource
 	) {
 		const { points, ofLotMeans, withinLots, effectiveSize } = curve;
@@ -49,7 +56,9 @@ export class CurveSimulator {
 				rowSquare(this.betweenRoot, p, points) + rowSquare(this.withinRoot, p, points)
 			);
 		this.sampleMean = new Float64Array(points);
-		this.sampleDeviation = new Float64Array(points);
+		this.sampleMargin = new Float64Array(points);
+		this.ofLotMeans = new Float64Array(points);
+		this.withinLots = new Float64Array(points);
 		this.triangle = new Float64Array(points * points);
 	}
 
@@ -72,9 +81,9 @@ export class CurveSimulator {
 		return devices;
 	}
 
-	/** Mean and deviations that a sample of this design would show. */
+	/** Means and margins that a sample of this design would show. */
 	drawSample(): void {
-		const { lots, effectiveSize, withinDegrees } = this.curve;
+		const { lots, withinDegrees } = this.curve;
 		const scale = 1 / Math.sqrt(lots);
 		const draw = Float64Array.from({ length: this.points }, () => this.normal() * scale);
 		for (let p = 0; p < this.points; p++) {
@@ -82,15 +91,14 @@ export class CurveSimulator {
 			for (let q = 0; q <= p; q++) sum += this.lotRoot[p * this.points + q]! * draw[q]!;
 			this.sampleMean[p] = sum;
 		}
-		this.sampleDeviation.fill(0);
-		this.addWishart(this.lotRoot, lots - 1, 1);
-		this.addWishart(this.withinRoot, withinDegrees, 1 - 1 / effectiveSize);
+		this.drawVariances(this.lotRoot, lots - 1, this.ofLotMeans);
+		this.drawVariances(this.withinRoot, withinDegrees, this.withinLots);
 		for (let p = 0; p < this.points; p++)
-			this.sampleDeviation[p] = Math.sqrt(this.sampleDeviation[p]!);
+			this.sampleMargin[p] = this.marginOf(this.ofLotMeans[p]!, this.withinLots[p]!);
 	}
 
-	/** Adds share · diagonal of (Wishart / degrees): the row squares of root × Bartlett's triangle. */
-	private addWishart(root: Float64Array, degrees: number, share: number): void {
+	/** Diagonal of Wishart / degrees: the row squares of root × Bartlett's triangle. */
+	private drawVariances(root: Float64Array, degrees: number, variances: Float64Array): void {
 		const { points, triangle } = this;
 		for (let row = 0; row < points; row++)
 			for (let column = 0; column <= row; column++)
@@ -108,7 +116,7 @@ export class CurveSimulator {
 					sum += root[p * points + row]! * triangle[row * points + column]!;
 				square += sum * sum;
 			}
-			this.sampleDeviation[p]! += (share * square) / degrees;
+			variances[p] = square / degrees;
 		}
 	}
 
@@ -123,24 +131,25 @@ export class CurveSimulator {
 		return sum;
 	}
 
-	/** The factor at which the drawn band holds the content of the devices everywhere. */
+	/** What the drawn margins are multiplied with to hold the content of the devices everywhere. */
 	wholeFactor(devices: Float64Array, content: number, sides: BandSides): number {
 		const { points } = this;
 		const count = devices.length / points;
 		const worst = new Float64Array(count);
+		const inverse = this.sampleMargin.map((margin) => 1 / margin);
 		for (let d = 0; d < count; d++) {
-			let most = -Infinity;
+			let [least, most] = [Infinity, -Infinity];
 			for (let p = 0; p < points; p++) {
-				const off = (devices[d * points + p]! - this.sampleMean[p]!) / this.sampleDeviation[p]!;
-				const beyond = sides === 'both' ? Math.abs(off) : sides === 'maximum' ? off : -off;
-				if (beyond > most) most = beyond;
+				const off = (devices[d * points + p]! - this.sampleMean[p]!) * inverse[p]!;
+				if (off > most) most = off;
+				if (off < least) least = off;
 			}
-			worst[d] = most;
+			worst[d] = sides === 'both' ? Math.max(most, -least) : sides === 'maximum' ? most : -least;
 		}
-		return quantile(worst.sort(), content);
+		return selectQuantile(worst, content);
 	}
 
-	/** The factor at which the drawn limit holds the content at one point; in closed form. */
+	/** The same at one point alone; in closed form. */
 	pointFactor(point: number, content: number, sides: BandSides): number {
 		const deviation = this.trueDeviation[point]!;
 		const offset = this.sampleMean[point]! / deviation;
@@ -148,31 +157,6 @@ export class CurveSimulator {
 			sides === 'both'
 				? coveringHalfWidth(offset, content)
 				: normalQuantile(content) + (sides === 'maximum' ? -offset : offset);
-		return (reach * deviation) / this.sampleDeviation[point]!;
+		return (reach * deviation) / this.sampleMargin[point]!;
 	}
-}
-
-/** Square of a row of a lower triangle. */
-function rowSquare(root: Float64Array, row: number, points: number): number {
-	let sum = 0;
-	for (let q = 0; q <= row; q++) sum += root[row * points + q]! ** 2;
-	return sum;
-}
-
-/** Lower triangular root of a covariance; directions without variance stay zero. */
-function choleskyRoot(matrix: Float64Array, points: number): Float64Array {
-	const root = new Float64Array(points * points);
-	for (let j = 0; j < points; j++) {
-		const pivot = matrix[j * points + j]! - rowSquare(root, j, points);
-		const isFlat = pivot <= 1e-12 * Math.abs(matrix[j * points + j]!);
-		const diagonal = isFlat ? 0 : Math.sqrt(pivot);
-		root[j * points + j] = diagonal;
-		for (let i = j + 1; i < points; i++) {
-			if (isFlat) continue;
-			let sum = matrix[i * points + j]!;
-			for (let k = 0; k < j; k++) sum -= root[i * points + k]! * root[j * points + k]!;
-			root[i * points + j] = sum / diagonal;
-		}
-	}
-	return root;
 }

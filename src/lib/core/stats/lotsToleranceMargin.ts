@@ -42,14 +42,17 @@ export function lotsToleranceMargin(strata: LotStrata, promise: TolerancePromise
 }
 
 /**
- * The generalized confidence that a margin keeps: {@link lotsToleranceMargin} the other way round.
- * A simulation needs no more than this.
+ * The generalized confidence that a margin keeps, as a function of the margin:
+ * {@link lotsToleranceMargin} the other way round. A simulation needs no more than this.
  *
  * @throws {OutsideDomainError} unless the content lies between 0 and 1
  */
-export function lotsMarginConfidence(strata: LotStrata, content: number, margin: number): number {
+export function lotsMarginConfidence(
+	strata: LotStrata,
+	content: number
+): (margin: number) => number {
 	requireProbability('lotsMarginConfidence', 'a content', content);
-	return marginConfidence(strata, normalQuantile(content), 1)(margin);
+	return marginConfidence(strata, normalQuantile(content), 1);
 }
 
 /**
@@ -71,18 +74,17 @@ export function lotsToleranceHalfWidth(strata: LotStrata, promise: ToleranceProm
 }
 
 /**
- * The generalized confidence that a half-width keeps: {@link lotsToleranceHalfWidth} the other way
- * round.
+ * The generalized confidence that a half-width keeps, as a function of the half-width:
+ * {@link lotsToleranceHalfWidth} the other way round.
  *
  * @throws {OutsideDomainError} unless the content lies between 0 and 1
  */
 export function lotsHalfWidthConfidence(
 	strata: LotStrata,
-	content: number,
-	halfWidth: number
-): number {
+	content: number
+): (halfWidth: number) => number {
 	requireProbability('lotsHalfWidthConfidence', 'a content', content);
-	return halfWidthConfidence(strata, normalQuantile((1 + content) / 2), 1)(halfWidth);
+	return halfWidthConfidence(strata, normalQuantile((1 + content) / 2), 1);
 }
 
 /** Confidence as a function of the reach of a limit, by a quadrature with steps widened so much. */
