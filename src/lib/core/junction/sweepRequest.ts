@@ -3,7 +3,7 @@ import { GRADING_EXPONENT_BOUNDS, JUNCTION_POTENTIAL_BOUNDS } from './capacitanc
 import { junctionKind } from './dieFacts';
 
 /** As many readings as one sweep may have. */
-const MOST_READINGS = 20_000;
+const MOST_READINGS = 5000;
 
 const readings = z.array(z.number()).min(1).max(MOST_READINGS);
 
