@@ -108,6 +108,8 @@ export const ACCESS: Readonly<Record<string, Access>> = {
 	'/api/v1/products GET': 'product.read',
 	'/api/v1/products/[partNumber] GET': 'product.read',
 	'/api/v1/products/[partNumber]/capacitance-table GET': 'limit.read',
+	'/api/v1/products/[partNumber]/distributions GET': 'measurement.read',
+	'/api/v1/products/[partNumber]/distributions POST': 'measurement.upload',
 	'/api/v1/products/[partNumber]/measurement-sets GET': 'measurement.read',
 	'/api/v1/products/[partNumber]/measurement-sets POST': 'measurement.upload',
 	'/api/v1/releases GET': 'library',

@@ -1,5 +1,7 @@
 import { and, eq, sql } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { CHARACTERISTICS } from '$lib/core/characteristics/catalogue';
+import { distributionMessages } from '$lib/core/messages/distributions';
 import { curveCovariance, momentsOfPair } from '$lib/core/distributions/jointDistribution';
 import { lineFromMoments, regressionLine } from '$lib/core/stats/regressionLine';
 import type { OpenDatabase } from '$lib/server/db/client';
@@ -7,11 +9,13 @@ import { findDistribution } from '$lib/server/db/findDistribution';
 import { findDistributions, type InterpolatedWanted } from '$lib/server/db/findDistributions';
 import { findJointDistribution } from '$lib/server/db/findJointDistribution';
 import { findMeasuredConditions } from '$lib/server/db/findMeasuredConditions';
-import { distribution, product } from '$lib/server/db/schema';
+import { listEnteredDistributions } from '$lib/server/db/listEnteredDistributions';
+import { audit, distribution, product } from '$lib/server/db/schema';
 import { write } from '$lib/server/db/write';
 import { computeDistributions } from '$lib/server/services/computeDistributions';
+import { enterDistribution } from '$lib/server/services/enterDistribution';
 import { ensureTemplates } from '$lib/server/services/ensureTemplates';
-import { insertAcceptedSet, insertProduct } from '../factories/acceptedSet';
+import { ENGINEER, insertAcceptedSet, insertProduct } from '../factories/acceptedSet';
 import { openTestDatabase } from '../factories/testDatabase';
 import { BIASES, columnOf, devices, FREQUENCY, SWEEP_KEY, sweeps } from '../factories/threeLots';
 import { unreachableStorage } from '../factories/unreachableStorage';
@@ -148,4 +152,128 @@ it('reads rows that were stored before origin, normality and components were kep
 		sampleSize: 300
 	});
 	expect(found).not.toHaveProperty('censoring');
+});
+
+describe('a distribution that is entered', () => {
+	/** ln of farad: a typical of 12.5 pF, 2 % of spread. */
+	const SUMMARY = {
+		characteristic: 'C_tot',
+		temperatureCelsius: -40,
+		frequency: FREQUENCY,
+		reverseVoltage: 4,
+		n: 48,
+		mean: Math.log(12.5e-12),
+		standardDeviation: 0.02,
+		reason: 'No chamber for −40 °C is free.',
+		source: 'Report of the wafer foundry, table 3.'
+	};
+	const enter = (change: Partial<typeof SUMMARY> & { transform?: 'identity' } = {}) =>
+		enterDistribution(
+			{ db: opened.db },
+			{ ...SUMMARY, ...change, partNumber: 'LKT-1130', by: ENGINEER }
+		);
+	const stored = async (temperatureCelsius: number) =>
+		(await findDistributions(opened.db, { ...scope, temperatureCelsius })).map(
+			({ distribution: of }) => of
+		);
+
+	it('is stored with reason and source, served where nothing is measured, and audited', async () => {
+		expect(await enter({ n: 40 })).toMatchObject({ status: 'entered' });
+		const outcome = await enter();
+		expect(outcome).toMatchObject({
+			status: 'entered',
+			conditionKey: 'T=-40;f=1000000;VR=4',
+			typical: expect.closeTo(12.5e-12, 24) as number
+		});
+		expect(await stored(-40)).toMatchObject([
+			{ origin: 'entered', sampleSize: 48, sets: [], groups: [], independentLots: 0 }
+		]);
+		const conditionKey = 'T=-40;f=1000000;VR=4';
+		expect(await findDistribution(opened.db, { ...scope, conditionKey })).toMatchObject({
+			origin: 'entered',
+			standardDeviation: 0.02
+		});
+		expect(await listEnteredDistributions(opened.db, productId)).toMatchObject([
+			{ n: 48, reason: SUMMARY.reason, source: SUMMARY.source, by: 'Ida Sandvik' },
+			{ n: 40 }
+		]);
+		const [entry] = await opened.db
+			.select()
+			.from(audit)
+			.where(eq(audit.action, 'distribution.enter'))
+			.limit(1);
+		expect(entry).toMatchObject({ subject: 'LKT-1130 C_tot T=-40;f=1000000;VR=4' });
+	});
+
+	it('is refused where devices are measured or can be interpolated between', async () => {
+		const refusal = {
+			status: 'refused',
+			why: 'measured',
+			message: distributionMessages.isMeasured()
+		};
+		expect(await enter({ temperatureCelsius: 25 })).toEqual(refusal);
+		expect(await enter({ temperatureCelsius: 25, reverseVoltage: 5.5 })).toEqual(refusal);
+		expect(await enter({ temperatureCelsius: 25, reverseVoltage: 10.5 })).toMatchObject({
+			status: 'entered'
+		});
+		expect((await stored(25)).map(({ origin }) => origin)).toEqual([
+			'measured',
+			'measured',
+			'measured',
+			'measured',
+			'entered'
+		]);
+	});
+
+	it('is refused for a characteristic nobody knows, and without a condition it depends on', async () => {
+		expect(await enter({ characteristic: 'V_Q' })).toMatchObject({
+			why: 'notAnswerable',
+			message: distributionMessages.unknownCharacteristic(
+				'V_Q',
+				CHARACTERISTICS.map(({ key }) => key)
+			)
+		});
+		const { reverseVoltage, ...withoutBias } = SUMMARY;
+		expect(reverseVoltage).toBe(4);
+		expect(
+			await enterDistribution(
+				{ db: opened.db },
+				{ ...withoutBias, partNumber: 'LKT-1130', by: ENGINEER }
+			)
+		).toMatchObject({ message: distributionMessages.conditionMissing('C_tot', 'reverseVoltage') });
+	});
+
+	it('is stored for a single reading with the first of what it depends on', async () => {
+		const voltage = {
+			characteristic: 'V_F',
+			temperatureCelsius: 25,
+			forwardCurrent: 1,
+			n: 30,
+			mean: 0.42,
+			standardDeviation: 0.006,
+			reason: SUMMARY.reason,
+			source: SUMMARY.source
+		};
+		const person = { partNumber: 'LKT-1130', by: ENGINEER };
+		expect(await enterDistribution({ db: opened.db }, { ...voltage, ...person })).toMatchObject({
+			conditionKey: 'T=25;IF=1',
+			typical: 0.42
+		});
+		expect(
+			await enterDistribution({ db: opened.db }, { ...voltage, ...person, frequency: 1e6 })
+		).toMatchObject({ message: distributionMessages.conditionUnused('V_F', 'frequency') });
+	});
+
+	it('is refused when its mean was given in picofarads', async () => {
+		expect(await enter({ mean: Math.log(12.5) })).toMatchObject({
+			status: 'refused',
+			why: 'notAnswerable',
+			message: distributionMessages.implausible('12.5 F', 'ln C_tot with C_tot in F')
+		});
+	});
+
+	it('is refused for a product that is not there', async () => {
+		const unknown = { ...SUMMARY, partNumber: 'LKT-0000', by: ENGINEER };
+		expect(await enterDistribution({ db: opened.db }, unknown)).toMatchObject({ why: 'noProduct' });
+	});
 });

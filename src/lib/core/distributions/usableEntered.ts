@@ -1,19 +1,25 @@
+import { conditionKey as keyOf } from '../characteristics/condition';
 import { readConditionKey } from './readConditionKey';
-import type { Distribution } from './summary';
+
+interface Measured {
+	/** The conditions at which devices were measured, biases included. */
+	readonly keys: readonly string[];
+	/** Whether they are sweeps, which speak for biases between those that were measured, too. */
+	readonly areSweeps: boolean;
+}
 
 /**
- * Entered distributions that stand where devices say nothing: at a temperature and frequency without
- * measurements, or at a bias outside of the measured range. Inside of it the devices speak, measured
+ * Entered distributions that stand where devices say nothing: at a condition without measurements,
+ * and for sweeps at a bias outside of the measured range. Inside of it the devices speak, measured
  * or interpolated.
- *
- * @param measuredKeys the conditions, with their biases, that were measured
  */
-export function usableEntered(
-	entered: readonly Distribution[],
-	measuredKeys: readonly string[]
-): Distribution[] {
+export function usableEntered<Entered extends { readonly conditionKey: string }>(
+	entered: readonly Entered[],
+	{ keys, areSweeps }: Measured
+): Entered[] {
+	if (!areSweeps) return entered.filter(({ conditionKey }) => !keys.includes(conditionKey));
 	const ranges = new Map<string, { lowest: number; highest: number }>();
-	for (const key of measuredKeys) {
+	for (const key of keys) {
 		const [sweep, bias] = splitKey(key);
 		const { lowest, highest } = ranges.get(sweep) ?? { lowest: bias, highest: bias };
 		ranges.set(sweep, { lowest: Math.min(lowest, bias), highest: Math.max(highest, bias) });
@@ -25,8 +31,8 @@ export function usableEntered(
 	});
 }
 
-/** Temperature and frequency, and the bias; 0 V where a condition has none. */
+/** The condition without its bias, and the bias. */
 function splitKey(key: string): [string, number] {
-	const { reverseVoltage = 0, temperatureCelsius, frequency } = readConditionKey(key);
-	return [`${temperatureCelsius} ${frequency}`, reverseVoltage];
+	const { reverseVoltage = Number.NaN, ...sweep } = readConditionKey(key);
+	return [keyOf(sweep), reverseVoltage];
 }

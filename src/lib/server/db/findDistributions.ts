@@ -1,4 +1,5 @@
 import { and, eq, inArray, like, sql } from 'drizzle-orm';
+import { findCharacteristic } from '$lib/core/characteristics/catalogue';
 import type { Condition } from '$lib/core/characteristics/condition';
 import { unpackGroups } from '$lib/core/distributions/packGroups';
 import { readConditionKey } from '$lib/core/distributions/readConditionKey';
@@ -44,7 +45,7 @@ export async function findDistributions(
 				eq(distribution.product, at.product),
 				eq(distribution.characteristic, at.characteristic),
 				eq(distribution.basisHash, at.basisHash),
-				like(distribution.conditionKey, `T=${at.temperatureCelsius};%`)
+				like(sql`${distribution.conditionKey} || ';'`, `T=${at.temperatureCelsius};%`)
 			)
 		);
 	const ids = keys.flatMap(({ id, conditionKey, isInterpolated }) => {
@@ -57,10 +58,10 @@ export async function findDistributions(
 		...distributionSummary.parse(row.summary),
 		...unpackGroups(row.groups)
 	}));
-	const entered = usableEntered(
-		await findEnteredDistributions(db, at),
-		keys.filter(({ isInterpolated }) => isInterpolated === 0).map((key) => key.conditionKey)
-	);
+	const entered = usableEntered(await findEnteredDistributions(db, at), {
+		keys: keys.filter((of) => of.isInterpolated === 0).map(({ conditionKey }) => conditionKey),
+		areSweeps: findCharacteristic(at.characteristic)?.measuredAs === 'sweep'
+	});
 	return [...computed, ...entered]
 		.map((of) => ({ condition: readConditionKey(of.conditionKey), distribution: of }))
 		.sort((a, b) => (a.condition.reverseVoltage ?? 0) - (b.condition.reverseVoltage ?? 0));

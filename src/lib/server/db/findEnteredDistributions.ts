@@ -1,4 +1,4 @@
-import { and, asc, eq, like } from 'drizzle-orm';
+import { and, asc, eq, like, sql } from 'drizzle-orm';
 import { enteredDistribution, enteredValues } from '$lib/core/distributions/enteredDistribution';
 import type { Distribution } from '$lib/core/distributions/summary';
 import type { Database } from './database';
@@ -20,7 +20,7 @@ export async function findEnteredDistributions(
 			and(
 				eq(enteredTable.product, at.product),
 				eq(enteredTable.characteristic, at.characteristic),
-				like(enteredTable.conditionKey, `T=${at.temperatureCelsius};%`)
+				like(sql`${enteredTable.conditionKey} || ';'`, `T=${at.temperatureCelsius};%`)
 			)
 		)
 		.orderBy(asc(enteredTable.id));
