@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { COLUMN_MEANINGS, MEANING_NAMES, MEANING_UNITS } from '$lib/core/measurements/columns';
+import { COLUMN_MEANINGS, MEANING_NAMES, unitsOfMeaning } from '$lib/core/measurements/columns';
+import { needsUnit } from '$lib/core/measurements/mapping';
 import type { UploadPreview } from '$lib/core/measurements/preview';
 import type { RequestedMapping } from '$lib/core/measurements/requestedMapping';
 import { requestedMapping } from '$lib/core/measurements/requestedMapping';
@@ -72,24 +73,27 @@ export function readMappingForm(values: MappingValues, preview: UploadPreview): 
 		}
 		return shifted(value, power);
 	};
+	const meanings = preview.columns.map((_, position) =>
+		z.enum(COLUMN_MEANINGS).catch('ignore').parse(values[columnField(position, 'meaning')])
+	);
 	const columns = preview.columns.map(({ header }, position) => {
-		const meaning = z
-			.enum(COLUMN_MEANINGS)
-			.catch('ignore')
-			.parse(values[columnField(position, 'meaning')]);
+		const meaning = meanings[position] ?? 'ignore';
 		const unit = values[columnField(position, 'unit')] ?? '';
-		if (MEANING_UNITS[meaning] !== undefined && unit === '') {
+		if (needsUnit(meaning, meanings.includes('unit')) && unit === '') {
 			errors[columnField(position, 'unit')] = [measurementMessages.unitMissing(header)];
 		}
-		return { header, meaning, unit: MEANING_UNITS[meaning] === undefined ? null : unit };
+		return { header, meaning, unit: unitsOfMeaning(meaning).length === 0 ? null : unit || null };
 	});
-	if ((values.biasSign ?? '') === '') errors.biasSign = [measurementMessages.biasSignMissing()];
+	const biasSign = values.biasSign || undefined;
+	if (biasSign === undefined && meanings.includes('bias')) {
+		errors.biasSign = [measurementMessages.biasSignMissing()];
+	}
 	const waferLots = readWaferLots(values.waferLots ?? '');
 	if (waferLots === undefined) errors.waferLots = [measurementMessages.waferLotLines()];
 
 	const said = {
 		columns,
-		biasSign: values.biasSign,
+		biasSign,
 		skipLines: Number(values.skipLines ?? 0),
 		setup: {
 			instrument: values.instrument ?? '',

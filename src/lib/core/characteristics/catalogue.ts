@@ -9,7 +9,7 @@ export interface Characteristic {
 	readonly name: string;
 	/** SI unit of the stored values. */
 	readonly unit: string;
-	/** What its value depends on, beside the junction temperature. */
+	/** What its value depends on, beside the junction temperature; a reading always states the first. */
 	readonly axes: readonly Exclude<keyof Condition, 'temperatureCelsius'>[];
 	/** Whether files give it as sweeps along the bias or as single readings. */
 	readonly measuredAs: 'sweep' | 'reading';

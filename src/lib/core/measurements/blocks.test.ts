@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { expect, it } from 'vitest';
-import { deviceColumns, packMatrix, unpackMatrix } from './blocks';
-import { PackedMatrixError } from './errors';
+import { deviceColumns, packFlags, packMatrix, unpackFlags, unpackMatrix } from './blocks';
+import { PackedFlagError, PackedMatrixError } from './errors';
 
 it('gives back every value bit by bit, absent ones included', () => {
 	fc.assert(
@@ -34,4 +34,21 @@ it('refuses device columns of different lengths', () => {
 	const columns = { lot: ['A'], wafer: ['1'], site: [''], element: [''], name: [] };
 	expect(deviceColumns.safeParse(columns).success).toBe(false);
 	expect(deviceColumns.safeParse({ ...columns, name: ['D1'] }).success).toBe(true);
+});
+
+it('gives back every censor flag, from bytes that start anywhere', () => {
+	fc.assert(
+		fc.property(fc.array(fc.constantFrom(-1, 0, 1)), fc.nat(9), (flags, start) => {
+			const bytes = new Uint8Array(start + flags.length);
+			bytes.set(packFlags(Int8Array.from(flags)), start);
+			expect([...unpackFlags(bytes.subarray(start))]).toEqual(flags);
+		})
+	);
+});
+
+// Two's complement: −1 is 0xff.
+it('writes a flag as a signed byte, and refuses a byte that is none', () => {
+	expect([...packFlags(Int8Array.of(-1, 0, 1))]).toEqual([0xff, 0, 1]);
+	expect(() => unpackFlags(Uint8Array.of(0, 2))).toThrow(new PackedFlagError(2));
+	expect(() => unpackFlags(Uint8Array.of(0xfe))).toThrow(new PackedFlagError(-2));
 });

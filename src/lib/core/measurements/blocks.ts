@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { PackedMatrixError } from './errors';
+import { PackedFlagError, PackedMatrixError } from './errors';
 
 /** Devices of a set come in chunks of this many; device index = chunk × CHUNK + row. */
 export const CHUNK = 2048;
@@ -51,4 +51,21 @@ export function unpackMatrix(bytes: Uint8Array): Float64Array {
 	const view = new DataView(bytes.buffer, bytes.byteOffset);
 	for (let i = 0; i < values.length; i++) values[i] = view.getFloat64(i * 8, true);
 	return values;
+}
+
+/** Censor flags as they are stored: one signed byte a device. */
+export function packFlags(flags: Int8Array): Uint8Array {
+	return new Uint8Array(flags.buffer, flags.byteOffset, flags.byteLength).slice();
+}
+
+/**
+ * What `packFlags` stored, copied out of the bytes.
+ *
+ * @throws {PackedFlagError} for a byte that is none of −1, 0 and 1
+ */
+export function unpackFlags(bytes: Uint8Array): Int8Array {
+	const flags = Int8Array.from(bytes);
+	const wrong = flags.find((flag) => flag < -1 || flag > 1);
+	if (wrong !== undefined) throw new PackedFlagError(wrong);
+	return flags;
 }

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import type { DeviceColumns } from './blocks';
 import { devicesByLot } from './devicesByLot';
 import type { Repeatability } from './repeatability';
 import type { ConditionSweeps, SweepTable } from './sweepTable';
@@ -25,9 +26,11 @@ export const setCounts = z.object({
 	),
 	conditions: z.array(
 		z.object({
+			quantity: z.enum(['capacitance', 'current']).default('capacitance'),
 			conditionKey: z.string(),
 			temperatureCelsius: z.number(),
-			frequency: z.number(),
+			/** In Hz; `null` for a current. */
+			frequency: z.number().nullable(),
 			/** Different biases, the lowest and the highest in V. */
 			biases: z.number().int(),
 			lowestBias: z.number(),
@@ -38,7 +41,25 @@ export const setCounts = z.object({
 			/** Lots with too few devices to find suspects among. */
 			lotsNotJudged: z.array(z.string())
 		})
-	)
+	),
+	/** Single readings, by characteristic and condition. */
+	readings: z
+		.array(
+			z.object({
+				/** Key of the catalogue. */
+				characteristic: z.string(),
+				conditionKey: z.string(),
+				/** Symbol of the unit in the file. */
+				unit: z.string(),
+				readings: z.number().int(),
+				/** Readings that are bounds. */
+				censored: z.number().int(),
+				/** Devices of each lot that have such a reading, in the order of `lotNames`. */
+				devices: z.array(z.number().int()),
+				lotsNotJudged: z.array(z.string())
+			})
+		)
+		.default([])
 });
 export type SetCounts = z.infer<typeof setCounts>;
 
@@ -54,21 +75,16 @@ export interface CountedWith {
 
 /** Counts a table of sweeps for the set's page and for scripts. */
 export function countSet(table: SweepTable, known: CountedWith): SetCounts {
-	const { devices } = table;
-	const members = [...devicesByLot(devices.lot)].sort(([a], [b]) => (a < b ? -1 : 1));
-	const lotNames = members.map(([lot, indices]) => ({
-		lot,
-		waferLot: known.waferLotOf.get(lot) ?? lot,
-		wafers: [...new Set(indices.map((device) => devices.wafer[device] ?? ''))].sort()
-	}));
+	const { members, lotNames, wafers } = countLots(table.devices, known.waferLotOf);
 	const conditions = table.conditions().map((condition) => {
 		const swept = members.map(
 			([, indices]) => indices.filter((device) => isSwept(condition, device)).length
 		);
 		return {
+			quantity: condition.quantity,
 			conditionKey: condition.key,
 			temperatureCelsius: condition.temperatureCelsius,
-			frequency: condition.frequency,
+			frequency: condition.frequency ?? null,
 			biases: new Set(condition.biases).size,
 			lowestBias: Math.min(...condition.biases),
 			highestBias: Math.max(...condition.biases),
@@ -79,10 +95,9 @@ export function countSet(table: SweepTable, known: CountedWith): SetCounts {
 				.map(({ lot }) => lot)
 		};
 	});
-	const total = (values: readonly number[]) => values.reduce((sum, value) => sum + value, 0);
 	return {
 		lots: lotNames.length,
-		wafers: total(lotNames.map(({ wafers }) => wafers.length)),
+		wafers,
 		devices: table.deviceCount,
 		sweeps: total(conditions.map((condition) => total(condition.devices))),
 		points: total(conditions.map(({ points }) => points)),
@@ -91,8 +106,24 @@ export function countSet(table: SweepTable, known: CountedWith): SetCounts {
 		comments: known.comments,
 		repeatability: known.repeatability ?? null,
 		lotNames,
-		conditions
+		conditions,
+		readings: []
 	};
+}
+
+/** The lots of a set by name, with the devices of each. */
+export function countLots(devices: DeviceColumns, waferLotOf: ReadonlyMap<string, string>) {
+	const members = [...devicesByLot(devices.lot)].sort(([a], [b]) => (a < b ? -1 : 1));
+	const lotNames = members.map(([lot, indices]) => ({
+		lot,
+		waferLot: waferLotOf.get(lot) ?? lot,
+		wafers: [...new Set(indices.map((device) => devices.wafer[device] ?? ''))].sort()
+	}));
+	return { members, lotNames, wafers: total(lotNames.map(({ wafers }) => wafers.length)) };
+}
+
+function total(values: readonly number[]): number {
+	return values.reduce((sum, value) => sum + value, 0);
 }
 
 function isSwept(condition: ConditionSweeps, device: number): boolean {

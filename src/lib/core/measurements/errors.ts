@@ -5,3 +5,11 @@ export class PackedMatrixError extends Error {
 		super(`a packed matrix requires a multiple of 8 bytes, got ${byteLength}`);
 	}
 }
+
+/** A stored censor flag says none of at most, exactly and at least. */
+export class PackedFlagError extends Error {
+	override readonly name = 'PackedFlagError';
+	constructor(readonly flag: number) {
+		super(`a censor flag requires −1, 0 or 1, got ${flag}`);
+	}
+}

@@ -1,19 +1,23 @@
-import { findUnitOfSize } from '../units/unit';
+import { findUnitOfSize, UNITS } from '../units/unit';
 import type { DeviceColumns } from './blocks';
+import { quotedName } from './quotedName';
+import type { SweptQuantity } from './sweepTable';
 
 /** A stored matrix with what its rows and columns are. */
 export interface ExportBlock {
 	readonly temperatureCelsius: number;
-	readonly frequency: number;
+	/** In Hz; a current has none. */
+	readonly frequency: number | undefined;
 	readonly devices: DeviceColumns;
 	readonly biases: readonly number[];
 	readonly values: Float64Array;
 }
 
-/** The header of an exported set; its capacitances are in the unit of the uploaded file. */
-export function exportHeader(unitScale: number): string {
-	const unit = findUnitOfSize('capacitance', unitScale)?.symbol ?? 'F';
-	return `lot,wafer,site,element,device,temperature_C,frequency_Hz,bias_V,capacitance_${unit === 'µF' ? 'uF' : unit}`;
+/** The header of an exported set; what was swept is in the unit of the uploaded file. */
+export function exportHeader(unitScale: number, quantity: SweptQuantity = 'capacitance'): string {
+	const unit = findUnitOfSize(quantity, unitScale)?.symbol ?? UNITS[quantity][0].symbol;
+	const frequency = quantity === 'capacitance' ? 'frequency_Hz,' : '';
+	return `lot,wafer,site,element,device,temperature_C,${frequency}bias_V,${quantity}_${unit.replace('µ', 'u')}`;
 }
 
 /**
@@ -24,16 +28,13 @@ export function* exportLines(block: ExportBlock): Generator<string> {
 	const { devices, biases, values } = block;
 	for (let row = 0; row < devices.lot.length; row++) {
 		const names = [devices.lot, devices.wafer, devices.site, devices.element, devices.name]
-			.map((column) => quoted(column[row] ?? ''))
+			.map((column) => quotedName(column[row] ?? ''))
 			.join(',');
-		const start = `${names},${block.temperatureCelsius},${block.frequency}`;
+		const frequency = block.frequency === undefined ? '' : `,${block.frequency}`;
+		const start = `${names},${block.temperatureCelsius}${frequency}`;
 		for (const [column, bias] of biases.entries()) {
 			const value = values[row * biases.length + column] ?? Number.NaN;
 			if (!Number.isNaN(value)) yield `${start},${bias},${value}`;
 		}
 	}
-}
-
-function quoted(name: string): string {
-	return /[",\r\n]|^\s|\s$/.test(name) ? `"${name.replaceAll('"', '""')}"` : name;
 }

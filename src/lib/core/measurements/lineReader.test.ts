@@ -47,9 +47,9 @@ const bytes = (text: string) => new TextEncoder().encode(text);
 
 /** Everything a reader says of a line. */
 function said(reader: LineReader, problem: string | undefined) {
-	const { names, temperatureCelsius, frequency, bias, capacitance, decimals } = reader;
+	const { names, temperatureCelsius, frequency, bias, value, decimals } = reader;
 	return problem === undefined
-		? { names: { ...names }, temperatureCelsius, frequency, bias, capacitance, decimals }
+		? { names: { ...names }, temperatureCelsius, frequency, bias, value, decimals }
 		: { problem };
 }
 
@@ -134,7 +134,7 @@ describe('a line', () => {
 			temperatureCelsius: 25,
 			frequency: 100_000,
 			bias: 0.5,
-			capacitance: 38.25,
+			value: 38.25,
 			decimals: 3
 		});
 	});

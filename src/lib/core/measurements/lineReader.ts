@@ -10,13 +10,13 @@ import { decimalsIn, NumberScanner } from './scanNumber';
 import { splitLine } from './splitLine';
 
 const NAMES = ['lot', 'waferLot', 'wafer', 'site', 'element', 'device'] as const;
-const NUMBERS = ['temperature', 'frequency', 'bias', 'capacitance'] as const;
+const NUMBERS = ['temperature', 'frequency', 'bias', 'capacitance', 'current'] as const;
 type NameMeaning = (typeof NAMES)[number];
 type NumberMeaning = (typeof NUMBERS)[number];
 
 const [QUOTE, SPACE, TAB] = [0x22, 0x20, 0x09];
-/** A farad and more is no diode's capacitance. */
-const OVERFLOW = 1;
+/** A farad and more is no diode's capacitance, a million amperes no diode's current. */
+const OVERFLOW = { capacitance: 1, current: 1e6 } as const;
 
 interface NumberColumn {
 	readonly position: number;
@@ -33,9 +33,11 @@ export interface Reading {
 	readonly temperatureCelsius: number;
 	readonly frequency: number;
 	readonly bias: number;
-	/** In the file's own unit. */
-	readonly capacitance: number;
-	/** Decimals the capacitance was written with. */
+	/**
+	 * Capacitance, or current with the sign of the bias (reverse positive), in the file's own unit.
+	 */
+	readonly value: number;
+	/** Decimals the value was written with. */
 	readonly decimals: number;
 	/** Whether the device is another than in the line before. */
 	readonly isOtherDevice: boolean;
@@ -50,7 +52,7 @@ export class LineReader implements Reading {
 	temperatureCelsius = Number.NaN;
 	frequency = Number.NaN;
 	bias = Number.NaN;
-	capacitance = Number.NaN;
+	value = Number.NaN;
 	decimals = 0;
 	isOtherDevice = true;
 
@@ -180,8 +182,18 @@ export class LineReader implements Reading {
 	): string | undefined {
 		if (meaning === 'capacitance') {
 			if (!(value > 0)) return measurementMessages.capacitanceNotPositive(read());
-			if (value * unit.scale >= OVERFLOW) return measurementMessages.capacitanceOverflow(read());
-			this.capacitance = value;
+			if (value * unit.scale >= OVERFLOW.capacitance) {
+				return measurementMessages.capacitanceOverflow(read());
+			}
+			this.value = value;
+			this.decimals = decimals;
+			return undefined;
+		}
+		if (meaning === 'current') {
+			if (Math.abs(value * unit.scale) >= OVERFLOW.current) {
+				return measurementMessages.currentOverflow(read());
+			}
+			this.value = this.#reversePositive(value);
 			this.decimals = decimals;
 			return undefined;
 		}
@@ -200,12 +212,16 @@ export class LineReader implements Reading {
 				this.frequency = si;
 				return undefined;
 			case 'bias':
-				// Adding zero makes zero of −0.
-				this.bias = (this.#mapping.biasSign === 'reverseNegative' ? -si : si) + 0;
+				this.bias = this.#reversePositive(si);
 				return undefined;
 			default:
 				return meaning satisfies never;
 		}
+	}
+
+	#reversePositive(value: number): number {
+		// Adding zero makes zero of −0.
+		return (this.#mapping.biasSign === 'reverseNegative' ? -value : value) + 0;
 	}
 }
 

@@ -1,9 +1,14 @@
 import { z } from 'zod';
 import { measurementMessages } from '../messages/measurements';
-import { findUnit } from '../units/unit';
 import type { Unit } from '../units/unit';
-import { columnMeaning, MEANING_UNITS } from './columns';
-import type { ColumnMeaning } from './columns';
+import {
+	columnMeaning,
+	contentOf,
+	FILE_CONTENTS,
+	findMeaningUnit,
+	unitsOfMeaning
+} from './columns';
+import type { ColumnMeaning, FileContent } from './columns';
 import { fileDialect } from './dialect';
 import type { MeasurementSetup } from './setup';
 
@@ -31,7 +36,12 @@ export const columnMapping = z.object({
 });
 export type ColumnMapping = z.infer<typeof columnMapping>;
 
-const ONCE: readonly ColumnMeaning[] = ['lot', 'device', 'bias', 'capacitance'];
+/** What a file of sweeps and one of readings must have. */
+const NEEDED = {
+	capacitance: ['lot', 'device', 'bias'],
+	current: ['lot', 'device', 'bias'],
+	value: ['lot', 'device', 'characteristic']
+} as const satisfies Record<FileContent, readonly ColumnMeaning[]>;
 
 /** Why a mapping can't be used yet, one sentence each; empty when it is complete. */
 export function mappingProblems(mapping: ColumnMapping, setup: MeasurementSetup): string[] {
@@ -39,25 +49,40 @@ export function mappingProblems(mapping: ColumnMapping, setup: MeasurementSetup)
 	const count = (meaning: ColumnMeaning) =>
 		columns.filter((column) => column.meaning === meaning).length;
 	const says = (meaning: ColumnMeaning) => count(meaning) > 0;
+	const content = contentOf(columns);
+	const isTold = says('unit');
 	return [
-		...ONCE.filter((meaning) => !says(meaning)).map(measurementMessages.columnMissing),
+		...NEEDED[content ?? 'capacitance']
+			.filter((meaning) => !says(meaning))
+			.map(measurementMessages.columnMissing),
+		...(content === undefined ? [measurementMessages.nothingMeasured()] : []),
+		...(FILE_CONTENTS.filter(says).length > 1 ? [measurementMessages.contentTwice()] : []),
 		...(says('temperature') || setup.temperatureCelsius !== null
 			? []
 			: [measurementMessages.temperatureMissing()]),
-		...(says('frequency') || setup.frequencyHertz !== null
+		...(content !== 'capacitance' || says('frequency') || setup.frequencyHertz !== null
 			? []
 			: [measurementMessages.frequencyMissing()]),
 		...columnMeaning.options
 			.filter((meaning) => meaning !== 'ignore' && count(meaning) > 1)
 			.map(measurementMessages.columnTwice),
 		...columns
-			.filter(({ meaning, unit }) => MEANING_UNITS[meaning] && unitOf(meaning, unit) === undefined)
-			.map(({ header }) => measurementMessages.unitMissing(header))
+			.filter(
+				({ meaning, unit }) => needsUnit(meaning, isTold) && unitOf(meaning, unit) === undefined
+			)
+			.map(({ header }) => measurementMessages.unitMissing(header)),
+		...columns
+			.filter(({ meaning, unit }) => meaning === 'value' && isTold && unit !== null)
+			.map(({ header }) => measurementMessages.unitTwice(header))
 	];
+}
+
+/** @param isTold whether a column states the unit of each value */
+export function needsUnit(meaning: ColumnMeaning, isTold: boolean): boolean {
+	return unitsOfMeaning(meaning).length > 0 && !(meaning === 'value' && isTold);
 }
 
 /** The unit a column is in, if it is one of its meaning's. */
 export function unitOf(meaning: ColumnMeaning, symbol: string | null): Unit | undefined {
-	const kind = MEANING_UNITS[meaning];
-	return kind === undefined || symbol === null ? undefined : findUnit(kind, symbol);
+	return symbol === null ? undefined : findMeaningUnit(meaning, symbol);
 }

@@ -29,7 +29,12 @@ describe('columns', () => {
 		['wafer_lot', 'waferLot', undefined],
 		['DUT', 'device', undefined],
 		['operator', 'ignore', undefined],
-		['I_R [nA]', 'ignore', undefined]
+		['I_R [nA]', 'reverseCurrent', 'nA'],
+		['value [mΩ]', 'value', 'mΩ'],
+		['Value', 'value', undefined],
+		['di_F/dt [A/µs]', 'currentSlope', 'A/µs'],
+		['pulse duration [µs]', 'pulseDuration', 'µs'],
+		['ambient', 'ignore', undefined]
 	] as const)('%s is %s in %s', (header, meaning, unit) => {
 		const column = recogniseColumn(header);
 		expect([column.meaning, column.unit?.symbol]).toEqual([meaning, unit]);

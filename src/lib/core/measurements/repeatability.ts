@@ -1,6 +1,6 @@
 import type { ConditionSweeps } from './sweepTable';
 
-/** How closely readings of one device at one bias agree. */
+/** How closely capacitances of one device at one bias agree. */
 export interface Repeatability {
 	/** Readings beyond the first of a device and bias. */
 	readonly degreesOfFreedom: number;
@@ -18,7 +18,7 @@ export function repeatability(
 ): Repeatability | undefined {
 	let degreesOfFreedom = 0;
 	let squares = 0;
-	for (const condition of conditions) {
+	for (const condition of conditions.filter(({ quantity }) => quantity === 'capacitance')) {
 		for (const { columns } of condition.columnsByBias()) {
 			if (columns.length < 2) continue;
 			for (let device = 0; device < deviceCount; device++) {

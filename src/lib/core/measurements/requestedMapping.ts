@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { measurementMessages } from '../messages/measurements';
-import { columnMeaning, MEANING_UNITS } from './columns';
+import { columnMeaning, unitsOfMeaning } from './columns';
 import { biasSign, columnMapping, mappingProblems } from './mapping';
 import type { ColumnMapping } from './mapping';
 import type { UploadPreview } from './preview';
@@ -58,7 +58,7 @@ export function completeMapping(preview: UploadPreview, said: RequestedMapping):
 		return {
 			header,
 			meaning: chosen.meaning,
-			unit: MEANING_UNITS[chosen.meaning] === undefined ? null : chosen.unit
+			unit: unitsOfMeaning(chosen.meaning).length === 0 ? null : chosen.unit
 		};
 	});
 	const mapping: ColumnMapping = {
@@ -70,7 +70,9 @@ export function completeMapping(preview: UploadPreview, said: RequestedMapping):
 	const messages = [
 		...unknown.map(({ header }) => measurementMessages.columnUnknown(header)),
 		...mappingProblems(mapping, said.setup),
-		...(sign === null ? [measurementMessages.biasSignMissing()] : [])
+		...(sign === null && columns.some(({ meaning }) => meaning === 'bias')
+			? [measurementMessages.biasSignMissing()]
+			: [])
 	];
 	return messages.length === 0
 		? { status: 'complete', mapping, setup: said.setup }

@@ -58,7 +58,9 @@ describe('outliers', () => {
 		});
 		const z = suspects[0]?.reason.robustZ ?? Number.NaN;
 		expect(z / -31.8856046808).toBeCloseTo(1.4826 / 1.482602218505602, 10);
-		expect(suspects[0]?.reason.text).toBe(measurementMessages.outlier(z, 0, 1, 1, 'A'));
+		expect(suspects[0]?.reason.text).toBe(
+			measurementMessages.outlier({ what: 'ln C', z, bias: 0, beyond: 1, biases: 1, lot: 'A' })
+		);
 	});
 
 	it('leaves a device at 5.9 robust standard deviations and takes one at 6.1', () => {

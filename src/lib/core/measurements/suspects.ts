@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { measurementMessages } from '../messages/measurements';
 import { devicesByLot } from './devicesByLot';
+import { CURRENT_SWEEP, measuredKey } from './measuredKey';
 import { sweepMeans } from './sweepMeans';
 import type { SweepMeans } from './sweepMeans';
 import { robustSpread } from './robustSpread';
@@ -11,24 +12,25 @@ import type { ConditionSweeps } from './sweepTable';
 /** Why a sweep waits in quarantine. */
 export const suspectReason = z.object({
 	rule: z.enum(['outlier', 'rises']),
-	/** Where it shows most, in V. */
+	/** Where a sweep shows it most, in V. */
 	bias: z.number().optional(),
-	/** Of ln C within the lot at that bias. */
+	/** Within the lot: of ln C, ln |I| at that bias, or of the transformed reading. */
 	robustZ: z.number().optional(),
 	text: z.string()
 });
 export type SuspectReason = z.infer<typeof suspectReason>;
 
-/** A sweep that a person must look at: a device at one temperature and frequency. */
+/** What a person must look at: a sweep or reading of a device at one condition. */
 export interface Suspect {
 	/** Index over the set. */
 	readonly device: number;
+	/** As `measuredKey` writes it. */
 	readonly conditionKey: string;
 	readonly reason: SuspectReason;
 }
 
 /** Robust standard deviations from the lot beyond which a reading is suspect. */
-const OUTLYING = 6;
+export const OUTLYING = 6;
 /** A rise is suspect beyond so many times the repeatability (the step's own spread is √2 of it). */
 const RISING = 6;
 /** Fewer devices of a lot have no spread to judge by. */
@@ -43,7 +45,7 @@ const ENOUGH_REPEATS = 10;
  *    larger of 1.4826·MAD and one step of the readings' resolution (with quantized readings MAD
  *    can be 0).
  * 2. *rises*: capacitance that rises with reverse bias by more than 6 times the repeatability and
- *    more than one step of the resolution.
+ *    more than one step of the resolution. A current may rise.
  *
  * @param lots lot of each device
  */
@@ -53,19 +55,32 @@ export function findSuspects(
 	repeats: Repeatability | undefined
 ): Suspect[] {
 	const means = sweepMeans(condition, lots.length);
-	const noise =
-		repeats !== undefined && repeats.degreesOfFreedom >= ENOUGH_REPEATS
-			? repeats.standardDeviation
-			: sweepNoise(means, lots);
-	const found = [...outliers(means, lots), ...rises(means, noise)];
+	const isCurrent = condition.quantity === 'current';
+	const found = isCurrent
+		? outliers(means, lots, 'ln |I|')
+		: [...outliers(means, lots, 'ln C'), ...rises(means, noiseOf(means, lots, repeats))];
+	const conditionKey = isCurrent
+		? measuredKey({ of: CURRENT_SWEEP, conditionKey: condition.key })
+		: condition.key;
 	return found
 		.sort((a, b) => a.device - b.device)
-		.map(({ device, reason }) => ({ device, conditionKey: condition.key, reason }));
+		.map(({ device, reason }) => ({ device, conditionKey, reason }));
 }
 
 type Found = Omit<Suspect, 'conditionKey'>;
 
-function outliers(means: SweepMeans, lots: readonly string[]): Found[] {
+function noiseOf(
+	means: SweepMeans,
+	lots: readonly string[],
+	repeats: Repeatability | undefined
+): number {
+	return repeats !== undefined && repeats.degreesOfFreedom >= ENOUGH_REPEATS
+		? repeats.standardDeviation
+		: sweepNoise(means, lots);
+}
+
+/** @param what is compared, as the sentence names it */
+function outliers(means: SweepMeans, lots: readonly string[], what: string): Found[] {
 	const worst = new Map<number, { z: number; bias: number; beyond: number }>();
 	for (const members of devicesByLot(lots).values()) {
 		for (const [position, bias] of means.biases.entries()) {
@@ -93,7 +108,14 @@ function outliers(means: SweepMeans, lots: readonly string[]): Found[] {
 			rule: 'outlier',
 			bias,
 			robustZ: z,
-			text: measurementMessages.outlier(z, bias, beyond, means.biases.length, lots[device] ?? '')
+			text: measurementMessages.outlier({
+				what,
+				z,
+				bias,
+				beyond,
+				biases: means.biases.length,
+				lot: lots[device] ?? ''
+			})
 		}
 	}));
 }

@@ -1,6 +1,9 @@
 import type { ConditionSweeps } from './sweepTable';
 
-/** ln of each device's mean capacitance at each bias of one condition, in the file's unit. */
+/**
+ * ln of each device's mean capacitance at each bias of one condition, in the file's unit. Of a
+ * current its size counts, and what is smaller than one step of the resolution is one step.
+ */
 export interface SweepMeans {
 	readonly deviceCount: number;
 	/** In V, from the lowest to the highest. */
@@ -16,6 +19,10 @@ export function sweepMeans(condition: ConditionSweeps, deviceCount: number): Swe
 	const ordered = condition.columnsByBias();
 	const width = ordered.length;
 	const values = new Float64Array(deviceCount * width);
+	const steps = ordered.map(({ columns }) =>
+		Number(`1e${-Math.max(...columns.map((column) => condition.decimals[column] ?? 0))}`)
+	);
+	const isCurrent = condition.quantity === 'current';
 	for (let device = 0; device < deviceCount; device++) {
 		for (let position = 0; position < width; position++) {
 			let [sum, count] = [0, 0];
@@ -25,15 +32,16 @@ export function sweepMeans(condition: ConditionSweeps, deviceCount: number): Swe
 				sum += value;
 				count += 1;
 			}
-			values[device * width + position] = Math.log(sum / count);
+			const mean = sum / count;
+			values[device * width + position] = Math.log(
+				isCurrent ? Math.max(Math.abs(mean), steps[position] ?? 0) : mean
+			);
 		}
 	}
 	return {
 		deviceCount,
 		biases: ordered.map(({ bias }) => bias),
-		steps: ordered.map(({ columns }) =>
-			Number(`1e${-Math.max(...columns.map((column) => condition.decimals[column] ?? 0))}`)
-		),
+		steps,
 		ln: (device, position) => values[device * width + position] ?? Number.NaN
 	};
 }

@@ -1,55 +1,49 @@
 import { conditionKey } from '../characteristics/condition';
 import { CHUNK } from './blocks';
 import type { DeviceColumns } from './blocks';
+import { DeviceList, type DeviceName } from './deviceList';
 
-/** Who a device is, as the file names it. */
-export interface DeviceName {
-	readonly lot: string;
-	readonly wafer: string;
-	readonly site: string;
-	readonly element: string;
-	readonly name: string;
-}
+/** What is swept along the bias. */
+export type SweptQuantity = 'capacitance' | 'current';
 
 /** Beyond these a file is refused: matrices of devices × biases would be mostly empty. */
 export const MOST_BIASES = 1024;
 export const MOST_CONDITIONS = 64;
 
-const SEPARATOR = '\u001f';
-
 /** Sweeps as they are read: devices, and one matrix a temperature and frequency. */
 export class SweepTable {
-	readonly devices: DeviceColumns = { lot: [], wafer: [], site: [], element: [], name: [] };
-	readonly #deviceOf = new Map<string, number>();
+	readonly #devices = new DeviceList();
 	readonly #conditions = new Map<string, ConditionSweeps>();
 	#last: ConditionSweeps | undefined;
 
-	/** The index of a device; a new one gets the next. */
-	deviceIndex({ lot, wafer, site, element, name }: DeviceName): number {
-		const key = [lot, wafer, site, element, name].join(SEPARATOR);
-		const known = this.#deviceOf.get(key);
-		if (known !== undefined) return known;
-		const index = this.devices.lot.length;
-		this.devices.lot.push(lot);
-		this.devices.wafer.push(wafer);
-		this.devices.site.push(site);
-		this.devices.element.push(element);
-		this.devices.name.push(name);
-		this.#deviceOf.set(key, index);
-		return index;
+	constructor(readonly quantity: SweptQuantity = 'capacitance') {}
+
+	get devices(): DeviceColumns {
+		return this.#devices.columns;
 	}
 
-	/** The sweeps of a temperature and frequency; `undefined` when there are too many already. */
-	condition(temperatureCelsius: number, frequency: number): ConditionSweeps | undefined {
+	/** The index of a device; a new one gets the next. */
+	deviceIndex(name: DeviceName): number {
+		return this.#devices.indexOf(name);
+	}
+
+	/**
+	 * The sweeps of a temperature and frequency (a current has none); `undefined` when there are too
+	 * many already.
+	 */
+	condition(temperatureCelsius: number, frequency?: number): ConditionSweeps | undefined {
 		const last = this.#last;
 		if (last?.temperatureCelsius === temperatureCelsius && last.frequency === frequency) {
 			return last;
 		}
-		const key = conditionKey({ temperatureCelsius, frequency });
+		const key = conditionKey({
+			temperatureCelsius,
+			...(frequency === undefined ? {} : { frequency })
+		});
 		let found = this.#conditions.get(key);
 		if (found === undefined) {
 			if (this.#conditions.size >= MOST_CONDITIONS) return undefined;
-			found = new ConditionSweeps(key, temperatureCelsius, frequency);
+			found = new ConditionSweeps(key, temperatureCelsius, frequency, this.quantity);
 			this.#conditions.set(key, found);
 		}
 		this.#last = found;
@@ -57,13 +51,14 @@ export class SweepTable {
 	}
 
 	get deviceCount(): number {
-		return this.devices.lot.length;
+		return this.#devices.count;
 	}
 
 	/** From the coldest to the hottest, then by frequency. */
 	conditions(): ConditionSweeps[] {
 		return [...this.#conditions.values()].sort(
-			(a, b) => a.temperatureCelsius - b.temperatureCelsius || a.frequency - b.frequency
+			(a, b) =>
+				a.temperatureCelsius - b.temperatureCelsius || (a.frequency ?? 0) - (b.frequency ?? 0)
 		);
 	}
 }
@@ -86,7 +81,8 @@ export class ConditionSweeps {
 	constructor(
 		readonly key: string,
 		readonly temperatureCelsius: number,
-		readonly frequency: number
+		readonly frequency: number | undefined,
+		readonly quantity: SweptQuantity = 'capacitance'
 	) {}
 
 	/** Takes a reading; `false` when there are too many biases already. */

@@ -1,6 +1,6 @@
 import { and, eq } from 'drizzle-orm';
 import type { Connection } from '../db/database';
-import { deviceBlock, measurementSet, suspect, sweepBlock } from '../db/schema';
+import { deviceBlock, measurementSet, readingBlock, suspect, sweepBlock } from '../db/schema';
 import { write } from '../db/write';
 
 /**
@@ -26,6 +26,26 @@ export async function clearStagedSets(db: Connection, upload: number): Promise<v
 							eq(sweepBlock.set, id),
 							eq(sweepBlock.conditionKey, conditionKey),
 							eq(sweepBlock.chunk, chunk)
+						)
+					)
+			);
+		}
+		const series = await db
+			.selectDistinct({
+				characteristic: readingBlock.characteristic,
+				conditionKey: readingBlock.conditionKey
+			})
+			.from(readingBlock)
+			.where(eq(readingBlock.set, id));
+		for (const { characteristic, conditionKey } of series) {
+			await write(db, (tx) =>
+				tx
+					.delete(readingBlock)
+					.where(
+						and(
+							eq(readingBlock.set, id),
+							eq(readingBlock.characteristic, characteristic),
+							eq(readingBlock.conditionKey, conditionKey)
 						)
 					)
 			);

@@ -1,13 +1,7 @@
 import { eq } from 'drizzle-orm';
 import { z } from 'zod';
 import { RefusalError } from '$lib/core/errors';
-import { countSet } from '$lib/core/measurements/counts';
-import { unitOf } from '$lib/core/measurements/mapping';
-import { MeasurementReader } from '$lib/core/measurements/measurementReader';
 import type { UploadProblems } from '$lib/core/measurements/problems';
-import { repeatability } from '$lib/core/measurements/repeatability';
-import { FEWEST_IN_LOT, findSuspects } from '$lib/core/measurements/suspects';
-import type { Suspect } from '$lib/core/measurements/suspects';
 import { measurementMessages } from '$lib/core/messages/measurements';
 import { findUpload } from '../db/findUpload';
 import type { FoundUpload } from '../db/findUpload';
@@ -16,20 +10,18 @@ import type { JobContext, JobHandler } from '../work/jobHandler';
 import type { Stores } from '../work/stores';
 import { acceptSet } from './acceptSet';
 import { clearStagedSets } from './clearStagedSets';
+import { gatherSet, openReader, type FileReader } from './gatherSet';
 import { refuseUpload } from './refuseUpload';
 import { reportBytes } from './reportBytes';
-import { openStagedSet, stageBlocks, stageSuspects } from './stageSet';
+import { openStagedSet, stageSuspects } from './stageSet';
 
 export const importMeasurementSetPayload = z.object({
 	upload: z.number().int(),
 	by: z.string()
 });
 
-/** Between two pieces of work that only compute, timers and other requests get their turn. */
-const breathe = () => new Promise((next) => setImmediate(next));
-
 /**
- * file → sweeps → checks → suspects → staged blocks → accepted set
+ * file → sweeps or readings → checks → suspects → staged blocks → accepted set
  *
  * Nothing of the set is visible until the last step, which is one transaction. What an earlier
  * attempt left behind is removed first.
@@ -42,46 +34,30 @@ export const importMeasurementSet: JobHandler = async (stores, payload, job) => 
 	if (found?.state !== 'mapped') return { upload: id, set: null };
 	await clearStagedSets(db, id);
 
-	const reader = await readSweepsOf(stores, found, job);
+	const reader = await readFileOf(stores, found, job);
 	const problems = await standsInTheWay(stores, found, reader);
 	if (problems !== undefined) {
 		await refuseUpload(db, id, problems);
 		throw new RefusalError(problems.message ?? measurementMessages.linesRefused(problems.total));
 	}
 
-	const { table } = reader;
-	const conditions = table.conditions();
-	const repeats = repeatability(conditions, table.deviceCount);
-	const suspects: Suspect[] = [];
-	for (const [done, condition] of conditions.entries()) {
-		job.report({ done, total: conditions.length, words: measurementMessages.judging() });
-		suspects.push(...findSuspects(condition, table.devices.lot, repeats));
-		await breathe();
-	}
-	const counts = countSet(table, {
-		waferLotOf: reader.waferLotOf,
-		suspects: new Set(suspects.map(({ device, conditionKey }) => `${device} ${conditionKey}`)).size,
-		skippedLines: reader.problems.total,
-		comments: reader.comments,
-		repeatability: repeats,
-		fewestInLot: FEWEST_IN_LOT
-	});
-
+	const gathered = await gatherSet(reader, confirmedOf(found).mapping, job);
+	const { counts } = gathered;
 	const set = await openStagedSet(db, { upload: found, by });
-	await stageBlocks(db, { set, table, unitScale: capacitanceScale(found), job });
-	await stageSuspects(db, set, suspects);
+	await gathered.stage(db, set);
+	await stageSuspects(db, set, gathered.suspects);
 	if (!(await job.isCurrent())) return { upload: id, set: null };
 	await acceptSet(db, { upload: found, set, counts, by });
 	return { upload: id, set, counts: { devices: counts.devices, points: counts.points } };
 };
 
-async function readSweepsOf(
+async function readFileOf(
 	{ db, storage }: Stores,
 	upload: FoundUpload,
 	job: JobContext
-): Promise<MeasurementReader> {
+): Promise<FileReader> {
 	const { mapping, setup } = confirmedOf(upload);
-	const reader = new MeasurementReader(mapping, setup);
+	const reader = openReader(mapping, setup);
 	for (const { name, waferLot } of await db
 		.select()
 		.from(lot)
@@ -103,7 +79,7 @@ async function readSweepsOf(
 async function standsInTheWay(
 	{ db }: Stores,
 	upload: FoundUpload,
-	{ table, problems, refusal, waferLotOf }: MeasurementReader
+	{ deviceCount, problems, refusal, waferLotOf }: FileReader
 ): Promise<UploadProblems | undefined> {
 	const { mapping } = confirmedOf(upload);
 	const { total } = problems;
@@ -117,7 +93,7 @@ async function standsInTheWay(
 	if (total !== mapping.skipLines) {
 		return because(measurementMessages.skipCountDiffers(mapping.skipLines, total));
 	}
-	if (table.deviceCount === 0) return because(measurementMessages.noDataLines());
+	if (deviceCount === 0) return because(measurementMessages.noDataLines());
 
 	const stored = await db.select().from(lot).where(eq(lot.product, upload.product));
 	for (const { name, waferLot } of stored) {
@@ -132,12 +108,4 @@ async function standsInTheWay(
 function confirmedOf({ id, confirmed }: FoundUpload) {
 	if (confirmed === null) throw new Error(`upload ${id} is mapped without a mapping`);
 	return confirmed;
-}
-
-function capacitanceScale(upload: FoundUpload): number {
-	const { columns } = confirmedOf(upload).mapping;
-	const column = columns.find(({ meaning }) => meaning === 'capacitance');
-	const unit = unitOf('capacitance', column?.unit ?? null);
-	if (unit === undefined) throw new Error(`upload ${upload.id} is mapped without a unit`);
-	return unit.scale;
 }

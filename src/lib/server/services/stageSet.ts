@@ -1,14 +1,18 @@
-import { CHUNK, packMatrix } from '$lib/core/measurements/blocks';
+import { CHUNK, packFlags, packMatrix } from '$lib/core/measurements/blocks';
+import type { DeviceColumns } from '$lib/core/measurements/blocks';
+import type { ReadingTable } from '$lib/core/measurements/readingTable';
 import type { Suspect } from '$lib/core/measurements/suspects';
 import type { SweepTable } from '$lib/core/measurements/sweepTable';
 import { measurementMessages } from '$lib/core/messages/measurements';
 import type { Connection } from '../db/database';
 import type { FoundUpload } from '../db/findUpload';
-import { deviceBlock, measurementSet, suspect, sweepBlock } from '../db/schema';
+import { deviceBlock, measurementSet, readingBlock, suspect, sweepBlock } from '../db/schema';
 import { write } from '../db/write';
 import type { JobContext } from '../work/jobHandler';
 import { sha256 } from './sha256';
 
+/** Blocks of readings of one transaction; one holds 18 kB at most. */
+const READINGS_A_WRITE = 16;
 /** Suspects of one transaction. */
 const SUSPECTS_A_WRITE = 100;
 
@@ -50,23 +54,15 @@ export async function stageBlocks(
 	const conditions = table.conditions();
 	const chunks = Math.ceil(table.deviceCount / CHUNK);
 	for (let chunk = 0; chunk < chunks; chunk++) {
-		const [from, to] = [chunk * CHUNK, (chunk + 1) * CHUNK];
-		const columns = {
-			lot: devices.lot.slice(from, to),
-			wafer: devices.wafer.slice(from, to),
-			site: devices.site.slice(from, to),
-			element: devices.element.slice(from, to),
-			name: devices.name.slice(from, to)
-		};
-		await write(db, (tx) => tx.insert(deviceBlock).values({ set, chunk, devices: columns }));
+		const rows = await stageDevices(db, { set, chunk, devices });
 		job.report({ done: chunk, total: chunks, words: measurementMessages.storing() });
 		for (const condition of conditions) {
-			const values = condition.matrix(chunk, columns.lot.length);
+			const values = condition.matrix(chunk, rows);
 			if (values === undefined) continue;
 			await write(db, (tx) =>
 				tx.insert(sweepBlock).values({
 					set,
-					quantity: 'capacitance',
+					quantity: table.quantity,
 					conditionKey: condition.key,
 					chunk,
 					gridHash: sha256(JSON.stringify(condition.biases)),
@@ -77,6 +73,62 @@ export async function stageBlocks(
 			);
 		}
 	}
+}
+
+/** Stores devices and single readings, some blocks a transaction. */
+export async function stageReadings(
+	db: Connection,
+	input: { readonly set: number; readonly table: ReadingTable; readonly job: JobContext }
+): Promise<void> {
+	const { set, table, job } = input;
+	const series = table.series();
+	const chunks = Math.ceil(table.devices.count / CHUNK);
+	for (let chunk = 0; chunk < chunks; chunk++) {
+		const rows = await stageDevices(db, { set, chunk, devices: table.devices.columns });
+		job.report({ done: chunk, total: chunks, words: measurementMessages.storingReadings() });
+		const blocks = series.flatMap((of) =>
+			Array.from({ length: of.repeats }, (_, repeat) => {
+				const block = of.block(repeat, chunk, rows);
+				return (
+					block && {
+						set,
+						characteristic: of.characteristic.key,
+						conditionKey: of.key,
+						repeat,
+						chunk,
+						unitScale: of.unit.scale,
+						values: Buffer.from(packMatrix(block.values).buffer),
+						censored: Buffer.from(packFlags(block.censored).buffer)
+					}
+				);
+			}).filter((block) => block !== undefined)
+		);
+		for (let first = 0; first < blocks.length; first += READINGS_A_WRITE) {
+			const some = blocks.slice(first, first + READINGS_A_WRITE);
+			await write(db, (tx) => tx.insert(readingBlock).values(some));
+		}
+	}
+}
+
+/** Stores who the devices of a chunk are; answers how many. */
+async function stageDevices(
+	db: Connection,
+	{
+		set,
+		chunk,
+		devices
+	}: { readonly set: number; readonly chunk: number; readonly devices: DeviceColumns }
+): Promise<number> {
+	const [from, to] = [chunk * CHUNK, (chunk + 1) * CHUNK];
+	const columns = {
+		lot: devices.lot.slice(from, to),
+		wafer: devices.wafer.slice(from, to),
+		site: devices.site.slice(from, to),
+		element: devices.element.slice(from, to),
+		name: devices.name.slice(from, to)
+	};
+	await write(db, (tx) => tx.insert(deviceBlock).values({ set, chunk, devices: columns }));
+	return columns.lot.length;
 }
 
 export async function stageSuspects(

@@ -1,7 +1,6 @@
 import { error, fail, redirect } from '@sveltejs/kit';
 import { superValidate } from 'sveltekit-superforms';
 import { zod as zod4 } from 'superforms-zod';
-import { readConditionKey } from '$lib/core/distributions/readConditionKey';
 import { measurementMessages } from '$lib/core/messages/measurements';
 import { isPermitted } from '$lib/core/review/permissions';
 import { verdictForm, verdictReason } from '$lib/forms/verdictForm';
@@ -26,8 +25,7 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 	const set = await setOf(locals, params);
 	const suspects = (await listSuspects(locals.db, set.id)).map((entry) => ({
 		...entry,
-		id: `${entry.device}-${entry.conditionKey}`,
-		at: readConditionKey(entry.conditionKey)
+		id: `${entry.device}-${entry.conditionKey}`
 	}));
 	const chosen = suspects.find(({ id }) => id === url.searchParams.get('sweep'));
 	return {
