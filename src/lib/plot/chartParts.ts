@@ -1,6 +1,7 @@
 import type { Field } from 'vega-lite/types_unstable/channeldef.js';
 import type { LayerSpec } from 'vega-lite/types_unstable/spec/index.js';
 import type { LetterSymbol } from '../core/characteristics/symbol';
+import { symbolRuns } from '../core/datasheet/symbolRuns';
 import type { ChartTheme, Stroke } from './chartTheme';
 import { textWidth } from './textWidth';
 
@@ -55,13 +56,26 @@ export function symbolPieces(symbol: LetterSymbol, rest: string, size: number): 
 
 const pieceWidth = (piece: LabelPiece) => textWidth(piece.text, piece.size, piece.style);
 
+/** Width of pieces side by side. */
+export const piecesWidth = (pieces: readonly LabelPiece[]) =>
+	pieces.reduce((sum, piece) => sum + pieceWidth(piece), 0);
+
+/** `typical, T_j = 25 °C` as pieces: symbols set as symbols. */
+export function labelPieces(text: string, size: number): LabelPiece[] {
+	return symbolRuns(text).flatMap((run): LabelPiece[] =>
+		run.kind === 'symbol'
+			? symbolPieces(run.symbol, '', size)
+			: [{ text: run.text, size, style: 'upright', drop: 0 }]
+	);
+}
+
 /** Text at a fixed place of a panel, its pieces side by side. */
 export function labelLayers(
 	pieces: readonly LabelPiece[],
 	at: Place & { readonly align: 'left' | 'right' },
 	color: string
 ): Layer[] {
-	const total = pieces.reduce((sum, piece) => sum + pieceWidth(piece), 0);
+	const total = piecesWidth(pieces);
 	let x = at.align === 'left' ? at.x : at.x - total;
 	return pieces.map((piece) => {
 		const left = x + textWidth(/^ */.exec(piece.text)?.[0] ?? '', piece.size);
@@ -82,15 +96,31 @@ export function labelLayers(
 	});
 }
 
+/** A plate of paper behind a label, a little larger than its text, that keeps the grid out. */
+export function labelPlate({ x, y }: Place, width: number, theme: ChartTheme): Layer {
+	const size = theme.labelSize;
+	const margin = size * 0.15;
+	return {
+		data: ONE_ROW,
+		mark: { type: 'rect', color: theme.paper, opacity: 1 },
+		encoding: fixedSpan(
+			{ x: x - margin, y: y - size * 0.75 - margin },
+			{ x: x + width + margin, y: y + size * 0.22 + margin }
+		)
+	};
+}
+
 /** A label beside a curve: a thin leader from the curve, and a plate that keeps the grid out. */
 export function leaderLabel(
-	text: string,
+	text: string | readonly LabelPiece[],
 	place: { readonly curve: Place; readonly label: Place; readonly align: 'left' | 'right' },
 	theme: ChartTheme
 ): Layer[] {
 	const { curve, label, align } = place;
 	const size = theme.labelSize;
-	const width = textWidth(text, size);
+	const pieces: readonly LabelPiece[] =
+		typeof text === 'string' ? [{ text, size, style: 'upright', drop: 0 }] : text;
+	const width = piecesWidth(pieces);
 	const left = align === 'left' ? label.x : label.x - width;
 	const margin = size * 0.15;
 	return [
@@ -102,18 +132,7 @@ export function leaderLabel(
 				y: label.y - size * 0.33
 			})
 		},
-		{
-			data: ONE_ROW,
-			mark: { type: 'rect', color: theme.paper, opacity: 1 },
-			encoding: fixedSpan(
-				{ x: left - margin, y: label.y - size * 0.75 - margin },
-				{ x: left + width + margin, y: label.y + size * 0.22 + margin }
-			)
-		},
-		...labelLayers(
-			[{ text, size, style: 'upright', drop: 0 }],
-			{ ...label, x: left, align: 'left' },
-			theme.ink
-		)
+		labelPlate({ x: left, y: label.y }, width, theme),
+		...labelLayers(pieces, { ...label, x: left, align: 'left' }, theme.ink)
 	];
 }

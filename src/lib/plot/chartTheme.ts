@@ -24,6 +24,8 @@ export interface ChartTheme {
 	readonly decade: Stroke;
 	readonly leader: Stroke;
 	readonly typical: Stroke;
+	/** Second and further curves of one chart. */
+	readonly further: Stroke;
 	readonly minimum: Stroke;
 	readonly maximum: Stroke;
 	readonly band: string;
@@ -57,12 +59,20 @@ export const printTheme: ChartTheme = {
 	decade: { color: '#777777', width: 0.3 },
 	leader: { color: '#000000', width: 0.35 },
 	typical: { color: '#000000', width: 1.15 },
+	further: { color: '#000000', width: 0.7 },
 	minimum: { color: '#000000', width: 0.6, dash: MINIMUM_DASH },
 	maximum: { color: '#000000', width: 0.6, dash: MAXIMUM_DASH },
 	band: '#d5e5e1',
 	sweep: { color: '#9a9a9a', width: 0.25 },
 	outside: { color: '#000000', width: 0.5 },
 	isInteractive: false
+};
+
+/** A chart over half the measure, so that two stand side by side. */
+export const halfPrintTheme: ChartTheme = {
+	...printTheme,
+	width: 84 * MILLIMETRE,
+	height: 80 * MILLIMETRE
 };
 
 /** The design tokens a chart uses, as values: a canvas can't read CSS variables. */
@@ -112,6 +122,7 @@ export function screenTheme(
 		decade: { color: inks.rule, width: 1.25 },
 		leader: { color: inks.inkSoft, width: 0.75 },
 		typical: { color: inks.cobalt, width: 2.25 },
+		further: { color: inks.cobalt, width: 1.25 },
 		minimum: { color: inks.ink, width: 1.25, dash: [9, 3] },
 		maximum: { color: inks.ink, width: 1.25, dash: [2.5, 2] },
 		band: inks.band,

@@ -16,6 +16,13 @@ export function wholeDigitAbove(value: number): number {
 	return digits.find((line) => line >= value) ?? value;
 }
 
+/** The largest digit × decade at or below a positive value: where an axis begins well. */
+export function wholeDigitBelow(value: number): number {
+	const exponent = Math.floor(Math.log10(value));
+	const digits = [9, 8, 7, 6, 5, 4, 3, 2, 1].map((digit) => decimal(digit, exponent));
+	return digits.find((line) => line <= value) ?? value;
+}
+
 /** Which digits of a decade are labelled, so that labels stay apart over so many decades. */
 function labelledDigits(decades: number): readonly number[] {
 	if (decades <= 2) return [1, 2, 3, 5];

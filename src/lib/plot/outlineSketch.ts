@@ -54,17 +54,30 @@ type Drawn = Pick<PackageOutline, 'shape' | 'dimensions' | 'land'>;
 /** A package from above, from the side and from its end, as large as the room lets it be. */
 export function outlineSketch(drawn: Drawn, room: Room): ScaledSketch {
 	const views = new Map(packageViews(drawn).map((view) => [view.name, view]));
-	return largest(room, (scale) => arranged(views, scale));
+	return largest(SCALES, room, (scale) => arranged(views, scale));
 }
 
-/** The pattern to solder to; `null` for a package without one. */
-export function landSketch(drawn: Drawn, room: Room): ScaledSketch | null {
+/**
+ * The pattern to solder to; `null` for a package without one.
+ *
+ * @param largestScale that of the outline beside it, which it doesn't exceed
+ */
+export function landSketch(
+	drawn: Drawn,
+	room: Room,
+	largestScale: number = SCALES[0]
+): ScaledSketch | null {
 	const view = packageLand(drawn);
-	return view === null ? null : largest(room, (scale) => viewMarks(view, scale));
+	const scales = SCALES.filter((scale) => scale <= largestScale);
+	return view === null ? null : largest(scales, room, (scale) => viewMarks(view, scale));
 }
 
-function largest(room: Room, draw: (scale: number) => SketchMark[]): ScaledSketch {
-	for (const scale of SCALES) {
+function largest(
+	scales: readonly number[],
+	room: Room,
+	draw: (scale: number) => SketchMark[]
+): ScaledSketch {
+	for (const scale of scales) {
 		const sketch = sketchOf(draw(scale));
 		if (sketch.width <= room.width && sketch.height <= room.height) return { ...sketch, scale };
 	}

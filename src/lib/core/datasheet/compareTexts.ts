@@ -1,15 +1,9 @@
 import type { Change } from './change';
 import type { DatasheetDocument } from './document';
 import { documentTexts } from './documentRows';
+import { drawingWordings } from './drawingWordings';
 import { plainText } from './plainText';
-
-/** One piece of wording under its id. */
-interface Wording {
-	readonly id: string;
-	readonly label: string;
-	readonly text: string;
-	readonly area: 'text' | 'ordering';
-}
+import type { Wording } from './wording';
 
 /** Differences in words: masthead, prose, ordering codes, notes, the notice. */
 export function compareTexts(before: DatasheetDocument, after: DatasheetDocument): Change[] {
@@ -54,7 +48,10 @@ function wordings(document: DatasheetDocument): Wording[] {
 			text: plainText(runs),
 			area: 'text' as const
 		})),
-		...document.sections.flatMap(sectionWordings)
+		...document.sections.flatMap((section) => [
+			...sectionWordings(section),
+			...drawingWordings(section)
+		])
 	];
 }
 

@@ -1,7 +1,14 @@
 import { z } from 'zod';
 import { letterSymbol } from '../characteristics/symbol';
 import { basis } from '../limits/basis';
-import { productClass } from '../template/template';
+import { dimension, landDimension, outlineShape } from '../outline/packageOutline';
+import {
+	chartAxis,
+	productClass,
+	terminal,
+	terminalGraphic,
+	testCircuit
+} from '../template/template';
 
 /** A run of text. Symbols are set by their own rule, bound digits are marked on a proof. */
 export const textRun = z.discriminatedUnion('kind', [
@@ -86,6 +93,25 @@ export const capacitanceRow = z.object({
 });
 export type CapacitanceRow = z.infer<typeof capacitanceRow>;
 
+/** A curve of a chart: points in the units of its axes, x rising. */
+export const chartCurve = z.object({
+	/** What tells it from the others: `typical, T_j = 25 °C`; symbols as plain text. */
+	label: z.string(),
+	points: z.array(z.tuple([z.number(), z.number()])).min(2),
+	/** Whether devices were measured there; a computed curve is dashed and says so. */
+	isMeasured: z.boolean()
+});
+export type ChartCurve = z.infer<typeof chartCurve>;
+
+/** A guaranteed value beside typical curves. */
+export const chartLimit = z.object({
+	x: z.number(),
+	y: z.number(),
+	side: z.enum(['minimum', 'maximum']),
+	label: z.string()
+});
+export type ChartLimit = z.infer<typeof chartLimit>;
+
 export const documentSection = z.discriminatedUnion('kind', [
 	z.object({ kind: z.literal('masthead') }),
 	z.object({
@@ -111,6 +137,15 @@ export const documentSection = z.discriminatedUnion('kind', [
 		)
 	}),
 	z.object({
+		kind: z.literal('terminals'),
+		heading: z.string(),
+		graphic: terminalGraphic,
+		terminals: z.array(terminal),
+		hasBand: z.boolean(),
+		/** Code on the body; `null` when the ordering codes differ in it. */
+		marking: z.string().nullable()
+	}),
+	z.object({
 		kind: z.literal('ordering'),
 		heading: z.string(),
 		rows: z.array(
@@ -129,6 +164,11 @@ export const documentSection = z.discriminatedUnion('kind', [
 		heading: z.string(),
 		note: z.string(),
 		rows: z.array(ratingRow)
+	}),
+	z.object({
+		kind: z.literal('thermal'),
+		heading: z.string(),
+		rows: z.array(characteristicRow)
 	}),
 	z.object({
 		kind: z.literal('characteristics'),
@@ -167,17 +207,64 @@ export const documentSection = z.discriminatedUnion('kind', [
 			})
 		)
 	}),
+	z.object({
+		kind: z.literal('chart'),
+		heading: z.string(),
+		caption: richText,
+		width: z.enum(['half', 'full']),
+		x: chartAxis,
+		y: chartAxis,
+		curves: z.array(chartCurve),
+		limits: z.array(chartLimit)
+	}),
+	z.object({
+		kind: z.literal('outline'),
+		heading: z.string(),
+		package: z.string(),
+		shape: outlineShape,
+		dimensions: z.array(dimension),
+		/** Empty where no land pattern is suggested. */
+		land: z.array(landDimension)
+	}),
+	z.object({
+		kind: z.literal('test-circuit'),
+		heading: z.string(),
+		circuit: testCircuit,
+		caption: richText
+	}),
+	z.object({
+		kind: z.literal('model'),
+		heading: z.string(),
+		/** Of what device at what temperature. */
+		conditions: richText,
+		parameters: z.array(
+			z.object({
+				/** Letters as the simulator has them: `CJO`. */
+				name: z.string(),
+				meaning: z.string(),
+				value: printedNumber,
+				unit: z.string()
+			})
+		),
+		/** The text of the model file. */
+		text: z.string(),
+		/** How well it gives the printed values back. */
+		note: z.string()
+	}),
 	z.object({ kind: z.literal('revision-history'), heading: z.string() }),
 	z.object({ kind: z.literal('notice'), heading: z.string(), paragraphs: z.array(z.string()) })
 ]);
 export type DocumentSection = z.infer<typeof documentSection>;
+
+/** The second format has more kinds of section; documents frozen in the first are read as they were. */
+export const DOCUMENT_FORMATS = ['platen-datasheet-1', 'platen-datasheet-2'] as const;
 
 /**
  * A resolved datasheet: everything it says, nothing of when or as which version it is published.
  * The same value feeds the screen, the PDF, the JSON, the difference and the hash.
  */
 export const datasheetDocument = z.object({
-	format: z.literal('platen-datasheet-1'),
+	format: z.enum(DOCUMENT_FORMATS),
 	partNumber: z.string(),
 	productClass,
 	className: z.string(),

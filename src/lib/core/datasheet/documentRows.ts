@@ -36,6 +36,7 @@ export function documentRows(document: DatasheetDocument): DocumentRow[] {
 		switch (section.kind) {
 			case 'ratings':
 				return section.rows.map((row) => ({ kind: 'rating', label: named(row), row }));
+			case 'thermal':
 			case 'characteristics':
 				return section.rows.map((row) => ({
 					kind: 'characteristic',
@@ -52,8 +53,13 @@ export function documentRows(document: DatasheetDocument): DocumentRow[] {
 			case 'masthead':
 			case 'prose':
 			case 'headline-figures':
+			case 'terminals':
 			case 'ordering':
 			case 'capacitance-chart':
+			case 'chart':
+			case 'outline':
+			case 'test-circuit':
+			case 'model':
 			case 'revision-history':
 			case 'notice':
 				return [];

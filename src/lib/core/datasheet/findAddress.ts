@@ -1,4 +1,4 @@
-import type { RatingSlot, Template } from '../template/template';
+import type { RatingSlot, Template, TemplateSection } from '../template/template';
 import type { LimitAddress } from './bindPlace';
 import { tableRowId } from './findPlaces';
 
@@ -12,6 +12,12 @@ export type PlaceAddress =
 			readonly rating: RatingSlot;
 	  };
 
+/** Sections whose slots are characteristics at one condition each. */
+const hasLimitSlots = (
+	section: TemplateSection
+): section is Extract<TemplateSection, { kind: 'characteristics' | 'thermal' }> =>
+	section.kind === 'characteristics' || section.kind === 'thermal';
+
 /** Where the place with this id is, or `undefined`. */
 export function findAddress({ sections }: Template, id: string): PlaceAddress | undefined {
 	for (const section of sections) {
@@ -19,7 +25,7 @@ export function findAddress({ sections }: Template, id: string): PlaceAddress | 
 			const rating = section.slots.find(({ slot }) => slot === id);
 			if (rating !== undefined) return { kind: 'rating', slot: id, bias: null, rating };
 		}
-		if (section.kind === 'characteristics' && section.slots.some(({ slot }) => slot === id))
+		if (hasLimitSlots(section) && section.slots.some(({ slot }) => slot === id))
 			return { kind: 'limit', slot: id, bias: null };
 		if (section.kind === 'capacitance-table') {
 			const bias = section.biases.find((at) => tableRowId(section.slot, at) === id);

@@ -26,6 +26,7 @@ export function findPlaces(input: ResolveInput): Place[] {
 		switch (section.kind) {
 			case 'ratings':
 				return section.slots.map((slot) => ratingPlace(input, slot, index));
+			case 'thermal':
 			case 'characteristics':
 				return section.slots.map((slot) => characteristicPlace(input, slot, index));
 			case 'capacitance-table':
@@ -33,8 +34,13 @@ export function findPlaces(input: ResolveInput): Place[] {
 			case 'masthead':
 			case 'prose':
 			case 'headline-figures':
+			case 'terminals':
 			case 'ordering':
 			case 'capacitance-chart':
+			case 'chart':
+			case 'outline':
+			case 'test-circuit':
+			case 'model':
 			case 'revision-history':
 			case 'notice':
 				return [];

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { change } from './change';
 
 const version = z.object({
 	major: z.number().int().nonnegative(),
@@ -20,7 +21,16 @@ export const publicationRecord = z.object({
 	contentHash: z.string().regex(/^[0-9a-f]{64}$/),
 	previous: z.object({ version, date: z.iso.date() }).nullable(),
 	/** Newest first. */
-	history: z.array(z.object({ version, date: z.iso.date(), changes: z.string() })),
+	history: z.array(
+		z.object({
+			version,
+			date: z.iso.date(),
+			/** In a person's words. */
+			changes: z.string(),
+			/** The differences one by one, weightiest first; older records haven't got them. */
+			list: z.array(change.pick({ kind: true, label: true, before: true, after: true })).optional()
+		})
+	),
 	/** Ids of the rows that differ from the previous release: they get a change bar. */
 	changedRows: z.array(z.string())
 });

@@ -8,10 +8,15 @@ import { findPlaces } from './findPlaces';
 import { footnotes } from './footnotes';
 import type { Place } from './place';
 import type { DraftProblem, Resolved, ResolveInput } from './resolveInput';
+import { resolveChart } from './resolveChart';
 import { resolveHeadline } from './resolveHeadline';
+import { resolveModel } from './resolveModel';
+import { resolveOutline } from './resolveOutline';
 import { resolveProse } from './resolveProse';
 import { characteristicRowOf, ratingRowOf } from './resolveRows';
 import { chartOf, resolveTable } from './resolveTable';
+import { resolveTerminals } from './resolveTerminals';
+import { symbolRuns } from './symbolRuns';
 
 /**
  * Makes a datasheet out of its parts. Pure: the same parts give the same document, byte by byte.
@@ -42,7 +47,7 @@ function documentOf(input: ResolveInput, shown: readonly Place[]): DatasheetDocu
 		sectionOf(input, section, index, shown)
 	);
 	return {
-		format: 'platen-datasheet-1',
+		format: template.format === 'platen-template-1' ? 'platen-datasheet-1' : 'platen-datasheet-2',
 		partNumber: product.partNumber,
 		productClass: product.productClass,
 		className: CLASS_NAMES[product.productClass],
@@ -80,11 +85,17 @@ function sectionOf(
 			const resolved = resolveHeadline(section.slots, shown);
 			return resolved.figures.length === 0 ? [] : [resolved];
 		}
+		case 'terminals':
+			return [resolveTerminals(section, input)];
 		case 'ordering':
 			return input.orderingCodes.length === 0 ? [] : [orderingOf(input, section.heading)];
 		case 'ratings': {
 			const { kind, heading, note = sheetTexts.limitingValues() } = section;
 			return own.length === 0 ? [] : [{ kind, heading, note, rows: own.map(ratingRowOf) }];
+		}
+		case 'thermal': {
+			const { kind, heading } = section;
+			return own.length === 0 ? [] : [{ kind, heading, rows: own.map(characteristicRowOf) }];
 		}
 		case 'characteristics': {
 			const { kind, heading } = section;
@@ -94,8 +105,23 @@ function sectionOf(
 		case 'capacitance-table':
 			return own.length === 0 ? [] : [resolveTable(section, own)];
 		case 'capacitance-chart': {
-			const chart = chartSectionOf(input, section, shown);
+			const chart = chartOf(section.heading, tableOf(input, section.table, shown));
 			return chart.points.length < 2 ? [] : [chart];
+		}
+		case 'chart': {
+			const { source } = section;
+			const table = source.from === 'table' ? tableOf(input, source.table, shown) : null;
+			return present(resolveChart(section, input, table));
+		}
+		case 'outline':
+			return present(resolveOutline(section, input));
+		case 'test-circuit': {
+			const { kind, heading, circuit, caption } = section;
+			return [{ kind, heading, circuit, caption: symbolRuns(caption) }];
+		}
+		case 'model': {
+			const table = tableOf(input, section.table, shown);
+			return present(resolveModel(section.heading, input, table, shown));
 		}
 		case 'revision-history':
 			return [{ kind: 'revision-history', heading: section.heading }];
@@ -123,18 +149,18 @@ function orderingOf({ orderingCodes, product }: ResolveInput, heading: string): 
 	};
 }
 
-function chartSectionOf(
-	{ template }: ResolveInput,
-	{ heading, table }: Extract<TemplateSection, { kind: 'capacitance-chart' }>,
-	shown: readonly Place[]
-) {
+const present = <Section>(section: Section | null): Section[] =>
+	section === null ? [] : [section];
+
+/** The table a chart or a model is made from, as it is printed. */
+function tableOf({ template }: ResolveInput, table: string, shown: readonly Place[]) {
 	const from = template.sections.find(
 		(section) => section.kind === 'capacitance-table' && section.slot === table
 	);
 	// The template's own check has made sure that the table is there.
 	if (from?.kind !== 'capacitance-table') throw new ChartWithoutTableError(table);
 	const rows = shown.filter(({ slot }) => slot === table);
-	return chartOf(heading, resolveTable(from, rows));
+	return resolveTable(from, rows);
 }
 
 /** A chart that names a table its template hasn't. */

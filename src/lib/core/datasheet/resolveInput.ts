@@ -4,7 +4,7 @@ import type { Organization } from '../organization';
 import type { ProductClass, Template } from '../template/template';
 import type { Binding, BoundTexts } from './binding';
 import type { Part } from './boundTexts';
-import type { DatasheetDocument, DatasheetStatus, SlotState } from './document';
+import type { ChartCurve, DatasheetDocument, DatasheetStatus, SlotState } from './document';
 
 /** All that a datasheet is made of, by value. */
 export interface ResolveInput {
@@ -34,6 +34,8 @@ export interface ResolveInput {
 	 * each by the policy of its binding, or by that of the draft where nothing is bound.
 	 */
 	readonly limits: ReadonlyMap<string, readonly LimitRow[]>;
+	/** Families of measured curves, by the key a chart names them with; none is stored without this. */
+	readonly curves?: ReadonlyMap<string, readonly ChartCurve[]>;
 	/** Every policy version that the rows name. */
 	readonly policies: ReadonlyMap<number, PolicyVersion>;
 }

@@ -107,6 +107,13 @@ export const sheetTexts = {
 	target: () => 'Target: every number is an aim of the design, and none of them is guaranteed.',
 	chartCaption: () =>
 		'Total capacitance against reverse voltage: typical curve and band between the printed limits; straight lines in log–log between table rows.',
+	furtherChanges: (count: number) => `and ${count} more`,
+	typicalCurve: () => 'typical',
+	fittedCurve: () => 'typical, by the law of the model',
+	typicalDevice: () => 'typical device',
+	modelFile: () => 'text of model.lib',
+	modelNote: (points: number, worst: string) =>
+		`One power law with the case in parallel, fitted to the ${points} typical values of the capacitance table; it gives them back within ${worst} %. Leakage is not modelled.`,
 	tested: () => 'tested on every device',
 	sampleTested: () => 'sample-tested: a sample of each lot',
 	correlation: () => 'guaranteed by correlation with a characteristic that is tested',

@@ -1,4 +1,4 @@
-import type { TemplateSection } from './template';
+import { SECOND_FORMAT_KINDS, type Template, type TemplateSection } from './template';
 
 interface Inconsistency {
 	readonly path: readonly (string | number)[];
@@ -6,11 +6,23 @@ interface Inconsistency {
 }
 
 /** What the shape of a template can't say: unique keys, and references that lead somewhere. */
-export function inconsistencies(sections: readonly TemplateSection[]): Inconsistency[] {
+export function inconsistencies({
+	format,
+	sections
+}: Pick<Template, 'format' | 'sections'>): Inconsistency[] {
 	return [
+		...(format === 'platen-template-1' ? tooNew(sections) : []),
 		...repeatedKeys(sections),
 		...sections.flatMap((section, at) => within(section, at, sections))
 	];
+}
+
+function tooNew(sections: readonly TemplateSection[]): Inconsistency[] {
+	return sections.flatMap(({ kind }, at) =>
+		SECOND_FORMAT_KINDS.has(kind)
+			? [{ path: [at, 'kind'], message: `expected a template of format 2 for a section "${kind}"` }]
+			: []
+	);
 }
 
 /** The slots and text blocks a section declares, with where each stands. */
@@ -24,6 +36,7 @@ function declared(
 		case 'capacitance-table':
 			return [{ key: section.slot, path: [at, 'slot'] }];
 		case 'ratings':
+		case 'thermal':
 		case 'characteristics':
 			return section.slots.map(({ slot }, index) => ({
 				key: slot,
@@ -31,8 +44,13 @@ function declared(
 			}));
 		case 'masthead':
 		case 'headline-figures':
+		case 'terminals':
 		case 'ordering':
 		case 'capacitance-chart':
+		case 'chart':
+		case 'outline':
+		case 'test-circuit':
+		case 'model':
 		case 'revision-history':
 		case 'notice':
 			return [];
@@ -65,13 +83,14 @@ function within(
 				: [{ path: [at, 'ratioTo'], message: `expected one of the biases, got ${ratioTo}` }])
 		];
 	}
-	if (section.kind === 'capacitance-chart') {
+	const table = tableReference(section, at);
+	if (table !== null) {
 		const isThere = sections.some(
-			(other) => other.kind === 'capacitance-table' && other.slot === section.table
+			(other) => other.kind === 'capacitance-table' && other.slot === table.key
 		);
 		return isThere
 			? []
-			: [{ path: [at, 'table'], message: `expected the slot of a table, got "${section.table}"` }];
+			: [{ path: table.path, message: `expected the slot of a table, got "${table.key}"` }];
 	}
 	if (section.kind === 'headline-figures') {
 		return section.slots.flatMap((slot, index) =>
@@ -86,6 +105,18 @@ function within(
 		);
 	}
 	return [];
+}
+
+/** The table a section is drawn or fitted from, with where the section names it. */
+function tableReference(
+	section: TemplateSection,
+	at: number
+): { readonly key: string; readonly path: (string | number)[] } | null {
+	if (section.kind === 'capacitance-chart' || section.kind === 'model')
+		return { key: section.table, path: [at, 'table'] };
+	if (section.kind === 'chart' && section.source.from === 'table')
+		return { key: section.source.table, path: [at, 'source', 'table'] };
+	return null;
 }
 
 /** A slot's own key, or that of a table with one of its biases: `capacitance.25c.4`. */

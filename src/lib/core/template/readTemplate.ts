@@ -33,7 +33,7 @@ export function readTemplate(text: string, source: string): Template {
 export function parseTemplate(json: unknown, source: string): Template {
 	const parsed = template.safeParse(json);
 	const problems = parsed.success
-		? inconsistencies(parsed.data.sections).map(({ path, ...rest }) => ({
+		? inconsistencies(parsed.data).map(({ path, ...rest }) => ({
 				path: ['sections', ...path],
 				...rest
 			}))

@@ -60,6 +60,43 @@ export const limitSlot = z.object({
 });
 export type LimitSlot = z.infer<typeof limitSlot>;
 
+/** What stands between the terminals in the graphic symbol. */
+export const TERMINAL_GRAPHICS = ['diode', 'schottky', 'tuning'] as const;
+export const terminalGraphic = z.enum(TERMINAL_GRAPHICS);
+export type TerminalGraphic = z.infer<typeof terminalGraphic>;
+
+/** Which is which: the number on the drawing, and what it is. */
+export const terminal = z.object({ number: z.string().min(1).max(3), name: z.string().min(1) });
+
+/** The set-ups that can be drawn; each measures one kind of characteristic. */
+export const TEST_CIRCUITS = [
+	'capacitance',
+	'pulsed-forward',
+	'reverse-recovery',
+	'series-resistance'
+] as const;
+export const testCircuit = z.enum(TEST_CIRCUITS);
+export type TestCircuit = z.infer<typeof testCircuit>;
+
+export const chartAxis = z.object({
+	symbol: letterSymbol,
+	unit: z.string(),
+	scale: z.enum(['linear', 'log'])
+});
+export type ChartAxis = z.infer<typeof chartAxis>;
+
+/** What a chart shows: what follows from a printed table, or curves that are stored under a key. */
+export const chartSource = z.discriminatedUnion('from', [
+	z.object({
+		from: z.literal('table'),
+		table: key,
+		/** 1/C² of the printed values; charge and energy of the power law fitted to them. */
+		show: z.enum(['inverse-square', 'charge', 'energy'])
+	}),
+	z.object({ from: z.literal('curves'), curves: key, x: chartAxis, y: chartAxis })
+]);
+export type ChartSource = z.infer<typeof chartSource>;
+
 /** One module a kind; datasheet.md lists what each prints. */
 export const templateSection = z.discriminatedUnion('kind', [
 	z.object({ kind: z.literal('masthead') }),
@@ -71,6 +108,14 @@ export const templateSection = z.discriminatedUnion('kind', [
 		hint: z.string()
 	}),
 	z.object({ kind: z.literal('headline-figures'), slots: z.array(key).max(4) }),
+	z.object({
+		kind: z.literal('terminals'),
+		heading,
+		graphic: terminalGraphic,
+		terminals: z.array(terminal).min(2).max(6),
+		/** Whether the body has a band at the end of terminal 1. */
+		hasBand: z.boolean()
+	}),
 	z.object({ kind: z.literal('ordering'), heading }),
 	z.object({
 		kind: z.literal('ratings'),
@@ -79,6 +124,7 @@ export const templateSection = z.discriminatedUnion('kind', [
 		note: z.string().optional(),
 		slots: z.array(ratingSlot)
 	}),
+	z.object({ kind: z.literal('thermal'), heading, slots: z.array(limitSlot) }),
 	z.object({ kind: z.literal('characteristics'), heading, slots: z.array(limitSlot) }),
 	z.object({
 		kind: z.literal('capacitance-table'),
@@ -93,17 +139,50 @@ export const templateSection = z.discriminatedUnion('kind', [
 		essential: z.boolean()
 	}),
 	z.object({ kind: z.literal('capacitance-chart'), heading, table: key }),
+	z.object({
+		kind: z.literal('chart'),
+		heading,
+		/** With symbols as plain text; the conditions belong here too. */
+		caption: z.string(),
+		source: chartSource,
+		width: z.enum(['half', 'full'])
+	}),
+	z.object({ kind: z.literal('outline'), heading, hasLand: z.boolean() }),
+	z.object({
+		kind: z.literal('test-circuit'),
+		heading,
+		circuit: testCircuit,
+		caption: z.string()
+	}),
+	/** Parameters of a simulator's model, fitted to the typical values of a table. */
+	z.object({ kind: z.literal('model'), heading, table: key }),
 	z.object({ kind: z.literal('revision-history'), heading }),
 	z.object({ kind: z.literal('notice'), heading })
 ]);
 export type TemplateSection = z.infer<typeof templateSection>;
 
 /**
+ * The formats a template can be written in. The second one has more kinds of section; what was
+ * written in the first is read as it was.
+ */
+export const TEMPLATE_FORMATS = ['platen-template-1', 'platen-template-2'] as const;
+
+/** The kinds that came with the second format. */
+export const SECOND_FORMAT_KINDS: ReadonlySet<TemplateSection['kind']> = new Set([
+	'terminals',
+	'thermal',
+	'chart',
+	'outline',
+	'test-circuit',
+	'model'
+]);
+
+/**
  * The shape of a datasheet template: data, not code; one JSON file a product class. What a shape
  * can't say is checked by `parseTemplate` as well.
  */
 export const template = z.object({
-	format: z.literal('platen-template-1'),
+	format: z.enum(TEMPLATE_FORMATS),
 	key,
 	name: z.string().min(1),
 	productClass,

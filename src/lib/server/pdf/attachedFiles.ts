@@ -3,6 +3,7 @@ import { canonicalBytes } from '../../core/datasheet/canonicalBytes';
 import { capacitanceTableCsv } from '../../core/datasheet/capacitanceTableCsv';
 import type { DatasheetDocument } from '../../core/datasheet/document';
 import { CAPACITANCE_TABLE } from './layout/sections/basisKey';
+import { MODEL } from './layout/sections/model';
 
 /** A file that travels inside the PDF. */
 export interface EmbeddedFile {
@@ -16,7 +17,7 @@ export interface EmbeddedFile {
 	readonly printedAt: string | null;
 }
 
-/** The document itself, and its capacitance tables as a spreadsheet can read them. */
+/** The document itself, its capacitance tables as a spreadsheet can read them, and its model. */
 export function attachedFiles(document: DatasheetDocument): EmbeddedFile[] {
 	const hasTable = document.sections.some(
 		(section) => section.kind === 'capacitance-table' && section.rows.length > 0
@@ -41,6 +42,20 @@ export function attachedFiles(document: DatasheetDocument): EmbeddedFile[] {
 						printedAt: CAPACITANCE_TABLE
 					}
 				]
-			: [])
+			: []),
+		...document.sections.flatMap((section) =>
+			section.kind === 'model'
+				? [
+						{
+							name: 'model.lib',
+							holds: 'SPICE model of a typical device',
+							mimeType: 'text/plain',
+							bytes: new TextEncoder().encode(section.text),
+							relationship: AFRelationship.Supplement,
+							printedAt: MODEL
+						}
+					]
+				: []
+		)
 	];
 }

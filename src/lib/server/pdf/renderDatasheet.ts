@@ -1,12 +1,14 @@
 import type { DatasheetDocument, DocumentSection } from '../../core/datasheet/document';
 import type { PublicationRecord } from '../../core/datasheet/record';
 import { capacitanceChart } from '../../plot/capacitanceChart';
+import { characteristicChart } from '../../plot/characteristicChart';
 import { printTheme } from '../../plot/chartTheme';
 import { attachedFiles } from './attachedFiles';
 import { drawChart } from './draw/drawChart';
 import { drawPdf } from './draw/drawPdf';
 import type { DrawnMark } from './layout/drawnMark';
 import { layoutDatasheet } from './layout/layoutDatasheet';
+import { chartTheme } from './layout/sections/halfFigures';
 
 /**
  * document, record → charts as marks → placed boxes → bytes
@@ -32,12 +34,15 @@ export async function drawCharts(
 ): Promise<ReadonlyMap<DocumentSection, readonly DrawnMark[]>> {
 	const charts = new Map<DocumentSection, readonly DrawnMark[]>();
 	for (const section of document.sections) {
-		if (section.kind !== 'capacitance-chart') continue;
-		const specification = capacitanceChart(
-			{ ...section, isProvisional: document.status !== 'production' },
-			printTheme
-		);
+		const specification = chartOf(section, document);
 		if (specification) charts.set(section, await drawChart(specification));
 	}
 	return charts;
+}
+
+function chartOf(section: DocumentSection, { status }: DatasheetDocument) {
+	if (section.kind === 'capacitance-chart')
+		return capacitanceChart({ ...section, isProvisional: status !== 'production' }, printTheme);
+	if (section.kind === 'chart') return characteristicChart(section, chartTheme(section));
+	return null;
 }

@@ -8,7 +8,15 @@ import { headlineFigures } from './sections/headlineFigures';
 import { masthead } from './sections/masthead';
 import { notice } from './sections/notice';
 import { ordering } from './sections/ordering';
-import { listColumns, proseParagraphs, type AttachedFile } from './sections/prose';
+import { figureSection, isFigure, isHalf } from './sections/halfFigures';
+import { model } from './sections/model';
+import { outline } from './sections/outline';
+import {
+	listColumns,
+	proseParagraphs,
+	type AttachedFile,
+	type ColumnSection
+} from './sections/prose';
 import { ratings } from './sections/ratings';
 import { revisionHistory } from './sections/revisionHistory';
 import { statusBox } from './sections/statusBox';
@@ -38,6 +46,7 @@ export function arrange(sheet: Sheet, attached: readonly AttachedFile[]): Sectio
 	if (box) sections.push(plain(box, null, GAPS.statusBox));
 
 	let figures = 0;
+	const nextNumber = () => ++figures;
 	let isAttachmentNamed = false;
 	const isCapacitanceChanged = capacitanceRowIds(sheet.document).some((row) =>
 		sheet.changed.has(row)
@@ -48,11 +57,11 @@ export function arrange(sheet: Sheet, attached: readonly AttachedFile[]): Sectio
 		switch (section.kind) {
 			case 'masthead':
 				break;
+			case 'terminals':
+				sections.push(columns(group, sheet));
+				break;
 			case 'prose':
-				if (section.style === 'list')
-					sections.push(
-						plain(listColumns(group.filter(isList), sheet), listTitle(group), 'section')
-					);
+				if (section.style === 'list') sections.push(columns(group, sheet));
 				else if (section.paragraphs.length > 0) {
 					const files = isAttachmentNamed ? [] : attached;
 					isAttachmentNamed = true;
@@ -71,6 +80,7 @@ export function arrange(sheet: Sheet, attached: readonly AttachedFile[]): Sectio
 			case 'ratings':
 				if (section.rows.length > 0) sections.push(ratings(section, sheet));
 				break;
+			case 'thermal':
 			case 'characteristics':
 				if (section.rows.length > 0) sections.push(characteristics(section, sheet));
 				break;
@@ -81,10 +91,20 @@ export function arrange(sheet: Sheet, attached: readonly AttachedFile[]): Sectio
 				if (section.points.length > 0)
 					sections.push(
 						capacitanceChartSection(section, sheet, {
-							figure: ++figures,
+							figure: nextNumber(),
 							isChanged: isCapacitanceChanged
 						})
 					);
+				break;
+			case 'chart':
+			case 'test-circuit':
+				sections.push(figureSection(group.filter(isFigure), sheet, nextNumber));
+				break;
+			case 'outline':
+				sections.push(outline(section, sheet, nextNumber));
+				break;
+			case 'model':
+				sections.push(model(section, sheet));
 				break;
 			case 'revision-history':
 				push(sections, revisionHistory(section, sheet));
@@ -103,23 +123,36 @@ function push(sections: Section[], section: Section | null) {
 	if (section !== null) sections.push(section);
 }
 
-const isList = (section: DocumentSection): section is SectionOf<'prose'> =>
-	section.kind === 'prose' && section.style === 'list';
-
-const listTitle = (group: readonly DocumentSection[]) =>
-	group
-		.filter(isList)
+function columns(group: readonly DocumentSection[], sheet: Sheet): Section {
+	const sections = group.filter(isColumn);
+	const title = sections
 		.map(({ heading }) => heading)
 		.filter((heading) => heading !== null)
 		.join(', ');
+	return plain(listColumns(sections, sheet), title, 'section');
+}
 
-/** Lists with something in them, up to three together; every other section by itself. */
+const isList = (section: DocumentSection): section is SectionOf<'prose'> =>
+	section.kind === 'prose' && section.style === 'list';
+
+const isColumn = (section: DocumentSection): section is ColumnSection =>
+	isList(section) || section.kind === 'terminals';
+
+/** Sections that share a row: up to three lists, up to two half figures. */
+const ROWS = [
+	{ belongs: isColumn, most: LISTS_IN_A_ROW },
+	{ belongs: isHalf, most: 2 }
+] as const;
+
+/** Lists with something in them and half figures in rows; every other section by itself. */
 function grouped(sections: readonly DocumentSection[]): DocumentSection[][] {
 	const groups: DocumentSection[][] = [];
 	for (const section of sections) {
 		if (isList(section) && section.paragraphs.length === 0) continue;
 		const last = groups.at(-1);
-		const joins = isList(section) && last?.every(isList) && last.length < LISTS_IN_A_ROW;
+		const joins = ROWS.some(
+			({ belongs, most }) => belongs(section) && last?.every(belongs) && last.length < most
+		);
 		if (joins) last?.push(section);
 		else groups.push([section]);
 	}

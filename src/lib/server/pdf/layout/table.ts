@@ -100,6 +100,8 @@ export interface RowDetails {
 	readonly header: number;
 	/** Rows a cell covers, by index. */
 	readonly spans?: Readonly<Record<number, number>>;
+	/** Columns a cell covers, by index. */
+	readonly columnSpans?: Readonly<Record<number, number>>;
 	readonly isChanged?: boolean;
 	/** State of a slot on a proof, and where its box begins. */
 	readonly state?: { readonly label: StateLabel; readonly x: number } | null;
@@ -133,9 +135,11 @@ export function rowBlock(
 		const cell = cells[at] ?? { kind: 'empty' };
 		if (cell.kind === 'covered') return;
 		const rowSpan = details.spans?.[at] ?? 1;
+		const columnSpan = details.columnSpans?.[at] ?? 1;
 		const tag = structure.add(at === details.header ? 'TH' : 'TD', row, {
 			...(at === details.header && { scope: 'Row' as const }),
-			...(rowSpan > 1 && { rowSpan })
+			...(rowSpan > 1 && { rowSpan }),
+			...(columnSpan > 1 && { columnSpan })
 		});
 		first ??= tag;
 		if (cell.kind === 'text') {

@@ -54,6 +54,7 @@ function outlineOf(section: TemplateSection): Omit<OutlineSection, 'kind'> {
 					isEssential: slot.essential
 				}))
 			};
+		case 'thermal':
 		case 'characteristics':
 			return {
 				title: section.heading,
@@ -82,6 +83,20 @@ function outlineOf(section: TemplateSection): Omit<OutlineSection, 'kind'> {
 			};
 		case 'capacitance-chart':
 			return { title: section.heading, note: `Drawn from ${section.table}.`, slots: [] };
+		case 'terminals':
+			return {
+				title: section.heading,
+				note: section.terminals.map(({ number, name }) => `${number} ${name}`).join(', '),
+				slots: []
+			};
+		case 'chart':
+			return { title: section.heading, note: section.caption, slots: [] };
+		case 'outline':
+			return { title: section.heading, note: 'From the product’s package.', slots: [] };
+		case 'test-circuit':
+			return { title: section.heading, note: section.caption, slots: [] };
+		case 'model':
+			return { title: section.heading, note: `Fitted to ${section.table}.`, slots: [] };
 		case 'ordering':
 			return { title: section.heading, note: 'From the product’s ordering codes.', slots: [] };
 		case 'revision-history':

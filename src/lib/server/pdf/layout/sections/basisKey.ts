@@ -62,7 +62,9 @@ export function shortKey(
 }
 
 const termsName = (section: DocumentSection) =>
-	section.kind === 'characteristics' ? section.heading : 'capacitance table';
+	section.kind === 'characteristics' || section.kind === 'thermal'
+		? section.heading
+		: 'capacitance table';
 
 /** The terms of every basis in full, then the statements that hold for all tables. */
 function fullTerms(sheet: Sheet): Block | null {
@@ -99,7 +101,10 @@ export function termsSection({ sections }: DatasheetDocument): DocumentSection |
 	const isThere = (section: DocumentSection) => 'rows' in section && section.rows.length > 0;
 	return (
 		sections.find((section) => section.kind === 'capacitance-table' && isThere(section)) ??
-		sections.findLast((section) => section.kind === 'characteristics' && isThere(section)) ??
+		sections.findLast(
+			(section) =>
+				(section.kind === 'characteristics' || section.kind === 'thermal') && isThere(section)
+		) ??
 		null
 	);
 }

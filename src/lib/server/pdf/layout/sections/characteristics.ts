@@ -31,10 +31,17 @@ interface Family {
 	readonly rows: readonly { readonly row: CharacteristicRow; readonly at: number }[];
 }
 
-/** Characteristics with conditions, limits and basis, in groups by junction temperature. */
-export function characteristics(section: SectionOf<'characteristics'>, sheet: Sheet): Section {
+/**
+ * Characteristics with conditions, limits and basis, in groups by junction temperature; thermal ones
+ * hold at any and stand in one group.
+ */
+export function characteristics(
+	section: SectionOf<'characteristics' | 'thermal'>,
+	sheet: Sheet
+): Section {
 	const { structure } = sheet;
-	const head = sectionHead(section.heading, section.note, { structure });
+	const isGrouped = section.kind === 'characteristics';
+	const head = sectionHead(section.heading, isGrouped ? section.note : '', { structure });
 	const table = structure.add('Table', structure.root);
 	const texts = {
 		minimum: groupThousands(section.rows.map((row) => row.minimum?.text ?? null)),
@@ -45,7 +52,7 @@ export function characteristics(section: SectionOf<'characteristics'>, sheet: Sh
 	const heads = headBlock(columns, { structure, table });
 	const leadsTo = termsLink(section, sheet);
 	const rows = families(section.rows).flatMap((family, at, all) => {
-		const isNewTemperature = all[at - 1]?.temperature !== family.temperature;
+		const isNewTemperature = isGrouped && all[at - 1]?.temperature !== family.temperature;
 		return [
 			...(isNewTemperature ? [temperatureRow(family.temperature, sheet, table)] : []),
 			...family.rows.map(({ row, at: place }, inFamily) =>

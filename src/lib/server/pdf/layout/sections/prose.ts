@@ -14,6 +14,7 @@ import {
 	textSpan
 } from '../typeset';
 import { sectionHead } from './sectionHead';
+import { terminalsColumn } from './terminals';
 
 const PARAGRAPH_WIDTH = mm(114);
 const ASIDE_X = mm(120);
@@ -89,18 +90,25 @@ function asideBoxes(attached: readonly AttachedFile[], sheet: Sheet, first: numb
 	return { boxes, end: y - leading + 3 };
 }
 
-/** Up to three lists side by side, each with its own rule and head. */
-export function listColumns(sections: readonly SectionOf<'prose'>[], sheet: Sheet): Block {
-	const columns = sections.map((section, at) => listColumn(section, at, sheet));
+/** Sections that take a third of the measure. */
+export type ColumnSection = SectionOf<'prose'> | SectionOf<'terminals'>;
+
+/** Up to three lists side by side, each with its own rule and head; the terminals are as wide. */
+export function listColumns(sections: readonly ColumnSection[], sheet: Sheet): Block {
+	const columns = sections.map((section, at) => {
+		const x = at * (THIRD + GUTTER);
+		return section.kind === 'terminals'
+			? terminalsColumn(section, x, sheet)
+			: listColumn(section, x, sheet);
+	});
 	return {
 		height: Math.max(...columns.map(({ height }) => height)),
 		boxes: columns.flatMap(({ boxes }) => boxes)
 	};
 }
 
-function listColumn(section: SectionOf<'prose'>, at: number, sheet: Sheet): Block {
+function listColumn(section: SectionOf<'prose'>, x: number, sheet: Sheet): Block {
 	const { structure } = sheet;
-	const x = at * (THIRD + GUTTER);
 	const style = STYLES.list;
 	const head = sectionHead(section.heading ?? '', '', { structure, x, width: THIRD });
 	const list = structure.add('L', structure.root);

@@ -61,11 +61,17 @@ function titleOf(section: TemplateSection): string {
 			return 'Headline figures';
 		case 'prose':
 			return section.heading ?? 'Headline';
+		case 'terminals':
 		case 'ordering':
 		case 'ratings':
+		case 'thermal':
 		case 'characteristics':
 		case 'capacitance-table':
 		case 'capacitance-chart':
+		case 'chart':
+		case 'outline':
+		case 'test-circuit':
+		case 'model':
 		case 'revision-history':
 		case 'notice':
 			return section.heading;
