@@ -247,6 +247,9 @@ it.each([
 it('refuses numbers of another kind at the door, with their place', () => {
 	const read = sweepRequest.safeParse({ ...SWEEP, permitivity: 11.9 });
 	expect(read.success).toBe(false);
+	const long = Array.from({ length: 2049 }, () => 1e-12);
+	const tooLong = sweepRequest.safeParse({ biases: long, capacitances: long });
+	expect(tooLong.error?.issues.map(({ path }) => path[0])).toEqual(['biases', 'capacitances']);
 	const hot = sweepRequest.safeParse({ ...SWEEP, fixed: { gradingExponent: 3 } });
 	expect(hot.error?.issues[0]?.path).toEqual(['fixed', 'gradingExponent']);
 });
