@@ -1,8 +1,7 @@
 import { SampleTooSmallError, OutsideDomainError } from './errors';
-import { logNormalLowerTail } from './logNormalTail';
 import { mean } from './mean';
-import { normalUpperTail } from './normalDistribution';
 import { standardDeviation } from './standardDeviation';
+import { tabulatedLogTail } from './tabulatedLogTail';
 
 export interface AndersonDarling {
 	/** A², the weighted distance of the sample from a normal population. */
@@ -48,15 +47,8 @@ export function andersonDarling(values: ArrayLike<number>): AndersonDarling {
 	for (let i = 0; i < count; i++) z[i] = (values[i]! - centre) / deviation;
 	z.sort();
 	let sum = 0;
-	for (let i = 0; i < count; i++) {
-		// The smaller tail gives the larger one: each value costs one tail instead of two.
-		const distance = Math.abs(z[i]!);
-		const tail = normalUpperTail(distance);
-		const smaller = tail > 0 ? Math.log(tail) : logNormalLowerTail(-distance);
-		const larger = Math.log1p(-tail);
-		const [below, above] = [2 * i + 1, 2 * (count - i) - 1];
-		sum += z[i]! < 0 ? below * smaller + above * larger : below * larger + above * smaller;
-	}
+	for (let i = 0; i < count; i++)
+		sum += (2 * i + 1) * tabulatedLogTail(z[i]!) + (2 * (count - i) - 1) * tabulatedLogTail(-z[i]!);
 	const statistic = -count - sum / count;
 	const adjusted = statistic * (1 + 0.75 / count + 2.25 / (count * count));
 	return { statistic, adjusted, pValue: andersonDarlingPValue(adjusted) };
@@ -68,12 +60,13 @@ export function andersonDarling(values: ArrayLike<number>): AndersonDarling {
  * of lots that differ are not normal even when every lot is.
  */
 export function residualsWithinLots(lots: readonly ArrayLike<number>[]): Float64Array {
-	const residuals: number[] = [];
-	for (const lot of lots) {
-		if (lot.length < 2) continue;
+	const repeated = lots.filter(({ length }) => length > 1);
+	const residuals = new Float64Array(repeated.reduce((sum, { length }) => sum + length, 0));
+	let filled = 0;
+	for (const lot of repeated) {
 		const centre = mean(lot);
 		const widening = Math.sqrt(lot.length / (lot.length - 1));
-		for (let i = 0; i < lot.length; i++) residuals.push((lot[i]! - centre) * widening);
+		for (let i = 0; i < lot.length; i++) residuals[filled++] = (lot[i]! - centre) * widening;
 	}
-	return Float64Array.from(residuals);
+	return residuals;
 }

@@ -13,8 +13,9 @@ export function skewness(values: ArrayLike<number>): number {
 	let [second, third] = [0, 0];
 	for (let i = 0; i < count; i++) {
 		const deviation = values[i]! - centre;
-		second += deviation * deviation;
-		third += deviation ** 3;
+		const square = deviation * deviation;
+		second += square;
+		third += square * deviation;
 	}
 	if (second === 0) return 0;
 	return third / count / (second / count) ** 1.5;

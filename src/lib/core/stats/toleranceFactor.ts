@@ -10,6 +10,10 @@ export interface TolerancePromise {
 	readonly confidence: number;
 }
 
+/** The rows of a table have one sample size and promise: their factor is solved for once. */
+const factors = new Map<string, number>();
+const REMEMBERED = 512;
+
 /**
  * k₁: mean + k₁·s lies above at least the content of a normal population, with the confidence.
  * Exact: t′(γ; n−1, z_P√n)/√n.
@@ -22,9 +26,15 @@ export interface TolerancePromise {
  */
 export function oneSidedToleranceFactor(sampleSize: number, promise: TolerancePromise): number {
 	checkPromise('oneSidedToleranceFactor', sampleSize, promise);
+	const key = `${sampleSize} ${promise.content} ${promise.confidence}`;
+	const known = factors.get(key);
+	if (known !== undefined) return known;
 	const root = Math.sqrt(sampleSize);
 	const noncentrality = normalQuantile(promise.content) * root;
-	return noncentralTQuantile(promise.confidence, sampleSize - 1, noncentrality) / root;
+	const factor = noncentralTQuantile(promise.confidence, sampleSize - 1, noncentrality) / root;
+	if (factors.size >= REMEMBERED) factors.clear();
+	factors.set(key, factor);
+	return factor;
 }
 
 /** Guards shared by the tolerance factors of one normal sample. */
