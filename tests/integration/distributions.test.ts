@@ -1,6 +1,7 @@
 import { and, eq, sql } from 'drizzle-orm';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { CHARACTERISTICS } from '$lib/core/characteristics/catalogue';
+import { packFlags, packMatrix } from '$lib/core/measurements/blocks';
 import { distributionMessages } from '$lib/core/messages/distributions';
 import { curveCovariance, momentsOfPair } from '$lib/core/distributions/jointDistribution';
 import { lineFromMoments, regressionLine } from '$lib/core/stats/regressionLine';
@@ -10,7 +11,7 @@ import { findDistributions, type InterpolatedWanted } from '$lib/server/db/findD
 import { findJointDistribution } from '$lib/server/db/findJointDistribution';
 import { findMeasuredConditions } from '$lib/server/db/findMeasuredConditions';
 import { listEnteredDistributions } from '$lib/server/db/listEnteredDistributions';
-import { audit, distribution, product } from '$lib/server/db/schema';
+import { audit, distribution, product, readingBlock, verdict } from '$lib/server/db/schema';
 import { write } from '$lib/server/db/write';
 import { computeDistributions } from '$lib/server/services/computeDistributions';
 import { enterDistribution } from '$lib/server/services/enterDistribution';
@@ -152,6 +153,76 @@ it('reads rows that were stored before origin, normality and components were kep
 		sampleSize: 300
 	});
 	expect(found).not.toHaveProperty('censoring');
+});
+
+describe('leakage of 75 devices, read single', () => {
+	const LEAKAGE_KEY = 'T=25;VR=10';
+	/** In nA; every nineteenth of the devices reads at the floor of 0.1 nA. */
+	const isAtFloor = (device: number) => device % 19 === 7;
+	const nanoamperes = Float64Array.from({ length: 75 }, (_, i) =>
+		isAtFloor(i) ? 0.1 : 0.15 + ((i * 37) % 75) / 50
+	);
+	let leaking = 0;
+
+	beforeAll(async () => {
+		leaking = await insertProduct(opened.db, 'LKS-2001');
+		const set = await insertAcceptedSet(opened.db, {
+			product: leaking,
+			sha256: 'b'.repeat(64),
+			uncertainty: 0.02,
+			devices: devices.filter((_, i) => i % 4 === 0),
+			biases: [],
+			frequency: FREQUENCY,
+			picofarads: new Map()
+		});
+		await write(opened.db, (tx) =>
+			tx.insert(readingBlock).values({
+				set,
+				characteristic: 'I_R',
+				conditionKey: LEAKAGE_KEY,
+				repeat: 0,
+				chunk: 0,
+				unitScale: 1e-9,
+				values: Buffer.from(packMatrix(nanoamperes)),
+				censored: Buffer.from(
+					packFlags(Int8Array.from(nanoamperes, (_, i) => (isAtFloor(i) ? -1 : 0)))
+				)
+			})
+		);
+		await write(opened.db, (tx) =>
+			tx.insert(verdict).values({
+				set,
+				device: 0,
+				conditionKey: `I_R ${LEAKAGE_KEY}`,
+				decision: 'exclude',
+				reason: 'The probe slipped.',
+				by: ENGINEER,
+				at: '2026-01-06T08:00:00.000Z'
+			})
+		);
+	});
+
+	it('comes out censored, with every device counted but the one a verdict excludes', async () => {
+		await compute({ product: leaking });
+		const [owner] = await opened.db.select().from(product).where(eq(product.id, leaking));
+		const found = await findDistribution(opened.db, {
+			product: leaking,
+			basisHash: owner?.basisHash ?? '',
+			characteristic: 'I_R',
+			conditionKey: LEAKAGE_KEY
+		});
+		expect(found).toMatchObject({
+			unit: 'A',
+			transform: 'ln',
+			sampleSize: 74,
+			independentLots: 3,
+			excluded: 1,
+			uncertainty: 0.02,
+			censoring: { atOrBelow: 4, atOrAbove: 0, ceiling: null }
+		});
+		expect(found?.censoring?.floor).toBeCloseTo(0.1e-9, 20);
+		expect(found?.groups.reduce((sum, of) => sum + of.sampleSize, 0)).toBe(70);
+	});
 });
 
 describe('a distribution that is entered', () => {

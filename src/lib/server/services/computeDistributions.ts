@@ -2,9 +2,11 @@ import { eq } from 'drizzle-orm';
 import { z } from 'zod';
 import { denseBand } from '$lib/core/distributions/biasesBetween';
 import { indexDevices } from '$lib/core/distributions/indexDevices';
+import type { JointDistribution } from '$lib/core/distributions/jointDistribution';
 import { packGroups } from '$lib/core/distributions/packGroups';
 import { packJoint } from '$lib/core/distributions/packJoint';
 import { readConditionKey } from '$lib/core/distributions/readConditionKey';
+import type { Distribution } from '$lib/core/distributions/summary';
 import { CHUNK } from '$lib/core/measurements/blocks';
 import { limitMessages } from '$lib/core/messages/limits';
 import { appendAudit } from '../db/appendAudit';
@@ -15,6 +17,8 @@ import type { JobContext, JobHandler } from '../work/jobHandler';
 import { enqueueAssessment } from './assessReleases';
 import { conditionDistributions } from './conditionDistributions';
 import { readBasis, type Basis } from './readBasis';
+import { readingDistribution } from './readingDistribution';
+import { readingSeries } from './readReadings';
 import { readDevices, sweepConditions } from './readSweeps';
 import { templateBiases } from './templateBiases';
 
@@ -36,7 +40,8 @@ export interface ComputedDistributions {
 }
 
 /**
- * basis → devices → distributions of a condition, measured, interpolated, joint → stored → complete
+ * basis → devices → distributions of each sweep condition, then of each series of readings → stored
+ * → complete
  *
  * Works condition by condition. Beside the measured biases it computes those that the product's
  * templates and the payload name, interpolated within each sweep; a dense band only when asked. The
@@ -69,54 +74,66 @@ async function storeDistributions(
 	basis: Basis,
 	job: JobContext
 ): Promise<number> {
+	const owner = { product: productId, basisHash: basis.hash };
 	const sets = basis.inputs.sets.map(({ id }) => id);
 	const devices = indexDevices(await readDevices(db, sets), CHUNK, basis.inputs.waferLots);
-	const conditions = await sweepConditions(db, sets);
+	const sweeps = await sweepConditions(db, sets);
+	const readings = await readingSeries(db, sets);
 	const named = [...biases, ...(await templateBiases(db, productId))];
+	const total = sweeps.length + readings.length;
+	const reportAt = (done: number, conditionKey: string) => {
+		const { temperatureCelsius } = readConditionKey(conditionKey);
+		job.report({ done, total, words: limitMessages.computingAt(temperatureCelsius) });
+	};
 	let stored = 0;
-	for (const [done, sweepKey] of conditions.entries()) {
-		job.report({
-			done,
-			total: conditions.length,
-			words: limitMessages.computingAt(readConditionKey(sweepKey).temperatureCelsius)
-		});
-		const found = await conditionDistributions(db, basis, devices, {
+	for (const [done, sweepKey] of sweeps.entries()) {
+		reportAt(done, sweepKey);
+		const { measured, interpolated, joint } = await conditionDistributions(db, basis, devices, {
 			sweepKey,
-			asked: (measured) => [...named, ...(isBand ? denseBand(measured) : [])]
+			asked: (grid) => [...named, ...(isBand ? denseBand(grid) : [])]
 		});
-		const distributions = [...found.measured, ...found.interpolated];
-		const owner = { product: productId, basisHash: basis.hash };
-		for (let first = 0; first < distributions.length; first += ROWS_A_WRITE) {
-			const rows = distributions.slice(first, first + ROWS_A_WRITE).map((of) => {
-				const { groups, extremes, ...summary } = of;
-				return {
-					...owner,
-					characteristic: of.characteristic,
-					conditionKey: of.conditionKey,
-					summary,
-					groups: Buffer.from(packGroups({ groups, extremes }))
-				};
-			});
-			await write(db, (tx) => tx.insert(distribution).values(rows).onConflictDoNothing());
-		}
-		const { joint } = found;
-		if (joint !== undefined) {
-			const row = {
-				...owner,
-				characteristic: joint.characteristic,
-				conditionKey: joint.conditionKey,
-				joint: Buffer.from(packJoint(joint))
-			};
-			await write(db, (tx) => tx.insert(jointDistribution).values(row).onConflictDoNothing());
-		}
-		stored += distributions.length;
+		stored += await storeRows(db, owner, [...measured, ...interpolated]);
+		if (joint !== undefined) await storeJoint(db, owner, joint);
 	}
-	job.report({
-		done: conditions.length,
-		total: conditions.length,
-		words: limitMessages.computed(stored)
-	});
+	for (const [position, series] of readings.entries()) {
+		reportAt(sweeps.length + position, series.conditionKey);
+		const found = await readingDistribution(db, basis, devices, series);
+		if (found !== undefined) stored += await storeRows(db, owner, [found]);
+	}
+	job.report({ done: total, total, words: limitMessages.computed(stored) });
 	return stored;
+}
+
+interface Owner {
+	readonly product: number;
+	readonly basisHash: string;
+}
+
+async function storeRows(
+	db: Connection,
+	owner: Owner,
+	distributions: readonly Distribution[]
+): Promise<number> {
+	for (let first = 0; first < distributions.length; first += ROWS_A_WRITE) {
+		const rows = distributions.slice(first, first + ROWS_A_WRITE).map((of) => {
+			const { groups, extremes, ...summary } = of;
+			return {
+				...owner,
+				characteristic: of.characteristic,
+				conditionKey: of.conditionKey,
+				summary,
+				groups: Buffer.from(packGroups({ groups, extremes }))
+			};
+		});
+		await write(db, (tx) => tx.insert(distribution).values(rows).onConflictDoNothing());
+	}
+	return distributions.length;
+}
+
+async function storeJoint(db: Connection, owner: Owner, joint: JointDistribution): Promise<void> {
+	const { characteristic, conditionKey } = joint;
+	const row = { ...owner, characteristic, conditionKey, joint: Buffer.from(packJoint(joint)) };
+	await write(db, (tx) => tx.insert(jointDistribution).values(row).onConflictDoNothing());
 }
 
 /** @returns whether nothing changed since `basis` was read, so that the product now points at it */

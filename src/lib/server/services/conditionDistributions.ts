@@ -17,6 +17,7 @@ import { medianOf } from '$lib/core/limits/typicalValue';
 import type { Database } from '../db/database';
 import { CAPACITANCE, type Basis } from './readBasis';
 import { readSweeps } from './readSweeps';
+import { setFacts } from './setFacts';
 
 /** What is stored of one temperature and frequency. */
 export interface ConditionDistributions {
@@ -81,49 +82,36 @@ export async function conditionDistributions(
 /** The columns of a condition, without the sweeps that verdicts or quarantine leave out. */
 async function gather(
 	db: Database,
-	{ inputs }: Basis,
+	basis: Basis,
 	devices: DeviceIndex,
 	sweepKey: string,
 	view: (matrix: SweepMatrix) => SweepMatrix
 ): Promise<BiasColumn[]> {
-	const leftOut = new Set(
-		inputs.leftOut
-			.filter(({ conditionKey }) => conditionKey === sweepKey)
-			.map(({ set, device }) => `${set} ${device}`)
-	);
+	const { isLeftOut } = setFacts(basis, sweepKey);
 	const columns = new ConditionColumns(devices);
-	const sets = inputs.sets.map(({ id }) => id);
+	const sets = basis.inputs.sets.map(({ id }) => id);
 	for await (const matrix of readSweeps(db, sets, sweepKey)) {
-		columns.add(view(matrix), (row) => leftOut.has(`${matrix.set} ${row}`));
+		columns.add(view(matrix), (row) => isLeftOut(matrix.set, row));
 	}
 	return columns.columns();
 }
 
 /** Sums up a column of this condition, with what its sets say of it. */
-function summarizer({ inputs }: Basis, devices: DeviceIndex, sweepKey: string) {
+function summarizer(basis: Basis, devices: DeviceIndex, sweepKey: string) {
 	const condition = readConditionKey(sweepKey);
-	const leftOut = inputs.leftOut.filter(({ conditionKey }) => conditionKey === sweepKey);
+	const facts = setFacts(basis, sweepKey);
 	return (
-		{ bias, values, sets: contributing }: BiasColumn,
+		{ bias, values, sets }: BiasColumn,
 		junctionPotential?: number
-	): Distribution | undefined => {
-		const from = new Set(contributing);
-		const stated = inputs.sets.flatMap(({ id, uncertainty }) =>
-			from.has(id) && uncertainty !== null ? [uncertainty] : []
-		);
-		const count = (why: string) =>
-			leftOut.filter((sweep) => from.has(sweep.set) && sweep.why === why).length;
-		return computeDistribution({
+	): Distribution | undefined =>
+		computeDistribution({
 			...CAPACITANCE,
 			conditionKey: keyOf({ ...condition, reverseVoltage: bias }),
 			values,
 			groupOf: devices.groupOf,
 			groups: devices.groups,
-			sets: contributing,
-			uncertainty: stated.length === 0 ? null : Math.max(...stated),
-			excluded: count('excluded'),
-			quarantined: count('quarantined'),
+			sets,
+			...facts.of(sets),
 			...(junctionPotential !== undefined && { junctionPotential })
 		});
-	};
 }
