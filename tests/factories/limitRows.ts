@@ -15,6 +15,7 @@ export function samplePolicy(id = 1, changes: Partial<LimitPolicy> = {}): Policy
 			content: 0.95,
 			confidence: 0.95,
 			tails: 'each',
+			span: 'each-bias',
 			minimumLots: 3,
 			minimumDevices: 30,
 			drift: 0,

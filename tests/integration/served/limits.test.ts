@@ -177,10 +177,13 @@ describe('the preview of limits', () => {
 		expect(await response.json()).toMatchObject({ status: 422, requiredSampleSize: 368 });
 	});
 
-	it.each(['{', '{"values":["a"]}'])('says where %s is wrong', async (body) => {
-		const response = await preview(body);
-		expect(response.status).toBe(400);
-		expect(await response.json()).toMatchObject({ detail: limitMessages.notALimitRequest() });
+	it('says what is no JSON, and where a value is none', async () => {
+		const broken = await preview('{');
+		expect(broken.status).toBe(400);
+		expect(await broken.json()).toMatchObject({ detail: limitMessages.notJson() });
+		const wrong = await preview({ values: [1, 'a'], policy });
+		expect(wrong.status).toBe(422);
+		expect(await wrong.json()).toMatchObject({ errors: [{ path: 'values[1]' }] });
 	});
 
 	it('is not for readers', async () => {

@@ -3,6 +3,7 @@ import type { Distribution } from '../distributions/summary';
 import { limitMessages } from '../messages/limits';
 import type { Basis } from './basis';
 import type { Allowance, Side } from './allowance';
+import type { CurveWidening } from './curveWidening';
 import { engineVersion } from './engineVersion';
 import { gateRefusals } from './gates';
 import type { LimitRow, LimitValue, TestYield } from './limit';
@@ -15,6 +16,7 @@ import { modelWarnings, sampleWarnings } from './rowWarnings';
 import { statedUncertainty } from './statedUncertainty';
 import { testYield } from './testYield';
 import { typicalValue } from './typicalValue';
+import { widen } from './widen';
 
 export interface LimitRowOptions {
 	readonly policyVersion: number;
@@ -31,6 +33,8 @@ export interface LimitRowOptions {
 	readonly symbol?: string;
 	/** Systematic uncertainty; that of the sets, unless given. */
 	readonly uncertainty?: Allowance;
+	/** Factor of a whole-curve policy. */
+	readonly widening?: CurveWidening | undefined;
 	/** A what-if may see what the house rule gives; it is warned, and nothing is printed from it. */
 	readonly allowsHouseRule?: boolean;
 }
@@ -103,7 +107,11 @@ function computeLimits(
 	typical: LimitValue
 ): Limits {
 	const gates = gateRefusals(distribution, rules);
-	const outcome = METHODS[rules.method]({ distribution, rules, sides });
+	const outcome = widen(
+		METHODS[rules.method]({ distribution, rules, sides }),
+		rules,
+		options.widening
+	);
 	if (outcome.status === 'refused') {
 		return refused([outcome.message, ...gates], outcome.requiredSampleSize);
 	}

@@ -14,6 +14,8 @@ export interface LimitInput {
 	readonly policyHash: string;
 	/** Whether single devices matter: order statistics, and the yield of a test. */
 	readonly usesExtremes: boolean;
+	/** The factor of a whole-curve policy. */
+	readonly widening?: number | undefined;
 }
 
 /**
@@ -41,6 +43,7 @@ export function limitInputText(input: LimitInput): string {
 			of.lowest,
 			of.highest
 		]),
-		...(input.usesExtremes ? { extremes } : {})
+		...(input.usesExtremes ? { extremes } : {}),
+		...(input.widening === undefined ? {} : { widening: input.widening })
 	});
 }

@@ -45,6 +45,7 @@ export const PLAIN_POLICY: LimitPolicy = {
 	content: 0.99,
 	confidence: 0.95,
 	tails: 'each',
+	span: 'each-bias',
 	minimumLots: 1,
 	minimumDevices: 2,
 	drift: 0,

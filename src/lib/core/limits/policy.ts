@@ -31,6 +31,8 @@ export const limitPolicy = z.object({
 	confidence: z.number().gt(0).lt(1),
 	/** Each limit on its own (confidence shared when both are promised), or content between both. */
 	tails: z.enum(['each', 'both']),
+	/** Whether each bias is promised on its own, or the content along the entire curve (`lots`). */
+	span: z.enum(['each-bias', 'whole-curve']).default('each-bias'),
 	/** Multiples of the standard deviation, for `sigma` only. */
 	k: z.number().positive().optional(),
 	minimumLots: z.number().int().min(1),

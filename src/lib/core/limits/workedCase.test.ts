@@ -43,6 +43,7 @@ const rules: LimitPolicy = {
 	content: 0.99,
 	confidence: 0.95,
 	tails: 'each',
+	span: 'each-bias',
 	minimumLots: 3,
 	minimumDevices: 30,
 	drift: 0,

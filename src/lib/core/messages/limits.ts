@@ -14,6 +14,10 @@ export const limitMessages = {
 		'Limits for future lots need lots with two devices at least; with one device a lot nothing shows the spread inside a lot.',
 	lotsNeedNumbers: () =>
 		'Limits for future lots need a number from every device; some readings here are censored. Choose a policy with “order” or “normal”.',
+	wholeCurveNeedsLots: (method: string) =>
+		`A promise along the whole curve is made by the method “lots” only, not by “${method}”.`,
+	wholeCurveNotSimulated: () =>
+		'The factor for the whole curve is not there: it is being simulated, or no device was measured at every bias.',
 	bothTailsNeedNumbers: () =>
 		'Content between both limits together needs a number from every device; some readings here are censored. Choose a policy that promises each limit on its own.',
 	censoredNeedReadings: () =>
@@ -28,7 +32,7 @@ export const limitMessages = {
 			: `The device that would be the maximum, rank ${rank} from above, lies at or above the clamp of the instrument; no maximum can be promised.`,
 	noLogarithm: (place: string, transform: string, value: number) =>
 		`${place}: ${transform} needs a value above zero, got ${value}. Mark readings at the floor as censored, or use “identity”.`,
-	notALimitRequest: () => 'The request is not one for limits; `errors` says where.',
+	notJson: () => 'Send values and a policy as JSON.',
 	notNormal: (statistic: string, p: string) =>
 		`The devices don’t follow the normal shape within their lots (Anderson–Darling A²\u00a0=\u00a0${statistic}, ${p}); the method rests on it.`,
 	enteredSummary: () =>

@@ -41,3 +41,6 @@ export const conditionNotMeasured = () => 'no accepted measurement at this condi
 
 export const secondRouteNote = () =>
 	'2nd route: separate reader, factor by integrating the confidence, before rounding; raw values may differ by 0.0001 %';
+
+export const wholeCurveHasOneRoute = () =>
+	'a factor for the whole curve is simulated, and there is no second route to it';

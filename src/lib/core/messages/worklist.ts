@@ -55,6 +55,7 @@ const JOB_NAMES: Readonly<Record<string, string>> = {
 	'import-measurement-set': 'Importing a measurement set',
 	'compute-distributions': 'Computing the distributions',
 	'assess-releases': 'Comparing published limits with newer data',
+	'simulate-widening': 'Simulating the factor for a whole curve',
 	'render-proof': 'Drawing a proof',
 	'verify-evidence': 'Gathering the evidence of a revision',
 	'publish-release': 'Publishing a release'

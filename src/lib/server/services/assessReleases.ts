@@ -1,5 +1,6 @@
 import { and, eq, inArray } from 'drizzle-orm';
 import { z } from 'zod';
+import { conditionKey as conditionKeyOf } from '$lib/core/characteristics/condition';
 import { documentRows, type DocumentRow } from '$lib/core/datasheet/documentRows';
 import { readDocument } from '$lib/core/datasheet/readDocument';
 import { computeLimitRow } from '$lib/core/limits/computeLimitRow';
@@ -8,12 +9,14 @@ import type { LimitRow } from '$lib/core/limits/limit';
 import type { AssessedRows } from '$lib/core/review/assessedRows';
 import type { Connection, Database } from '../db/database';
 import { findDistribution } from '../db/findDistribution';
+import { findJointDistribution } from '../db/findJointDistribution';
 import { findLimitsByTrace } from '../db/findLimitByTrace';
 import { findPolicyVersion, type StoredPolicy } from '../db/findPolicies';
 import { product, release, releaseAssessment, revision } from '../db/schema';
 import { write } from '../db/write';
 import { enqueue } from '../work/enqueue';
 import type { JobHandler } from '../work/jobHandler';
+import { computedWidening } from './curveWidening';
 
 export const assessReleasesPayload = z.object({ product: z.number().int() });
 
@@ -110,6 +113,14 @@ async function assessRow(
 	if (distribution === undefined) return { state: 'holds', text: '' } as const;
 	const basis = row.basis ?? 'typical';
 	const sides = (['minimum', 'maximum'] as const).filter((side) => limit[side] !== null);
+	const joint =
+		policy.rules.span === 'whole-curve'
+			? await findJointDistribution(db, {
+					...today,
+					characteristic,
+					conditionKey: conditionKeyOf({ ...condition, reverseVoltage: undefined })
+				})
+			: undefined;
 	const recomputed = computeLimitRow(distribution, policy.rules, {
 		policyVersion: policy.id,
 		condition,
@@ -117,7 +128,8 @@ async function assessRow(
 		unitScale,
 		inputHash: '',
 		sides,
-		declaredBasis: basis
+		declaredBasis: basis,
+		widening: joint && (await computedWidening(db, joint, policy.rules, sides))
 	});
 	return assessPublished(
 		{

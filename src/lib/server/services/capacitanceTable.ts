@@ -3,6 +3,7 @@ import { conditionKey } from '$lib/core/characteristics/condition';
 import type { Basis } from '$lib/core/limits/basis';
 import { checkTable } from '$lib/core/limits/checkTable';
 import { computeLimitRow } from '$lib/core/limits/computeLimitRow';
+import type { CurveWidening } from '$lib/core/limits/curveWidening';
 import { engineVersion } from '$lib/core/limits/engineVersion';
 import type { LimitRow } from '$lib/core/limits/limit';
 import { limitInputText } from '$lib/core/limits/limitInput';
@@ -16,6 +17,7 @@ import { findDistributions, type StoredDistribution } from '../db/findDistributi
 import { findMeasuredConditions } from '../db/findMeasuredConditions';
 import { findPolicyVersion, type StoredPolicy } from '../db/findPolicies';
 import { product } from '../db/schema';
+import { enqueueWidening, storedWidening, type CurveOf } from './curveWidening';
 import { rememberedRows, rememberRows } from './limitMemo';
 import { CAPACITANCE } from './readBasis';
 import { sha256 } from './sha256';
@@ -75,7 +77,11 @@ export async function capacitanceTable(
 		characteristic: CAPACITANCE.characteristic
 	};
 	const { temperatureCelsius } = request;
-	const stored = await findDistributions(db, { ...scope, temperatureCelsius });
+	const stored = await findDistributions(db, {
+		...scope,
+		temperatureCelsius,
+		interpolated: request.biases ?? []
+	});
 	if (stored.length === 0) {
 		const measured = await findMeasuredConditions(db, scope);
 		const temperatures = [...new Set(measured.map((at) => at.temperatureCelsius))];
@@ -105,9 +111,29 @@ export async function capacitanceTable(
 		stored: atFrequency,
 		unit,
 		biases,
-		frequency
+		frequency,
+		widening: await wideningOf(db, policy, {
+			...scope,
+			conditionKey: conditionKey({
+				temperatureCelsius,
+				...(frequency === undefined ? {} : { frequency })
+			}),
+			sides: request.sides ?? ['minimum', 'maximum']
+		})
 	});
 	return { ...unit, temperatureCelsius, frequency, rows: checkTable(rows) };
+}
+
+/** The whole-curve factor where the policy asks for one; what isn't simulated yet is asked for. */
+async function wideningOf(
+	db: Connection,
+	policy: StoredPolicy,
+	curve: CurveOf
+): Promise<CurveWidening | undefined> {
+	if (policy.rules.span === 'each-bias' || policy.rules.method !== 'lots') return undefined;
+	const found = await storedWidening(db, curve, policy.rules);
+	if (found === undefined) await enqueueWidening(db, curve, policy.id);
+	return found;
 }
 
 function refuse(parameter: RequestParameter, message: string): CapacitanceTable {
@@ -122,6 +148,7 @@ interface RowsWanted {
 	readonly unit: TableUnit;
 	readonly biases: readonly number[];
 	readonly frequency: number | undefined;
+	readonly widening: CurveWidening | undefined;
 }
 
 async function limitRows(db: Connection, wanted: RowsWanted): Promise<LimitRow[]> {
@@ -139,7 +166,8 @@ async function limitRows(db: Connection, wanted: RowsWanted): Promise<LimitRow[]
 				declaredBasis,
 				sides,
 				policyHash: policy.hash,
-				usesExtremes: policy.rules.method === 'order' || isTested
+				usesExtremes: policy.rules.method === 'order' || isTested,
+				widening: wanted.widening?.widening
 			})
 		)
 	}));
@@ -159,7 +187,8 @@ async function limitRows(db: Connection, wanted: RowsWanted): Promise<LimitRow[]
 				...unit,
 				inputHash,
 				sides,
-				declaredBasis
+				declaredBasis,
+				widening: wanted.widening
 			})
 		);
 	await rememberRows(db, fresh);

@@ -2,6 +2,7 @@ import { assessReleases } from '../services/assessReleases';
 import { computeDistributions } from '../services/computeDistributions';
 import { importMeasurementSet } from '../services/importMeasurementSet';
 import { publishReleaseJob } from '../services/publishReleaseJob';
+import { simulateWideningJob } from '../services/curveWidening';
 import { readUpload } from '../services/readUpload';
 import { renderProof } from '../services/renderProof';
 import { verifyEvidence } from '../services/verifyEvidence';
@@ -13,6 +14,7 @@ export const handlers: Readonly<Record<string, JobHandler>> = {
 	'import-measurement-set': importMeasurementSet,
 	'compute-distributions': computeDistributions,
 	'assess-releases': assessReleases,
+	'simulate-widening': simulateWideningJob,
 	'verify-evidence': verifyEvidence,
 	'render-proof': renderProof,
 	'publish-release': publishReleaseJob

@@ -95,6 +95,7 @@ function rulesOf(policy: PreviewRequest['policy']): LimitPolicy {
 		content: policy.content,
 		confidence: policy.confidence,
 		tails: policy.tails,
+		span: 'each-bias',
 		minimumLots: policy.method === 'lots' ? FEWEST_LOTS : 1,
 		minimumDevices: 2,
 		drift: policy.drift ?? 0,

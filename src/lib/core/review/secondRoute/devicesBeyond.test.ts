@@ -35,6 +35,7 @@ describe('how many devices a basis allows beyond one limit', () => {
 				content: 0.95,
 				confidence: 0.95,
 				tails: 'each',
+				span: 'each-bias',
 				minimumLots: 1,
 				minimumDevices: 2,
 				drift: 0,

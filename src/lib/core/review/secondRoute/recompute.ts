@@ -1,6 +1,7 @@
 import { EXTREMES } from '../../distributions/extremes';
 import type { Allowance, Side } from '../../limits/allowance';
 import type { LimitPolicy } from '../../limits/policy';
+import { wholeCurveHasOneRoute } from '../../messages/verification';
 import { lotsHalfWidth, lotsMargin } from './lotsMargin';
 import { lotSpread } from './lotSpread';
 import { normalProbability } from './normalProbability';
@@ -46,6 +47,7 @@ export function recompute(
 ): Recomputation {
 	if (devices.length < 2)
 		return { status: 'refused', reason: `only ${devices.length} measured devices` };
+	if (rules.span === 'whole-curve') return { status: 'refused', reason: wholeCurveHasOneRoute() };
 	const between = betweenOf(devices, rules, isShared);
 	if (typeof between === 'string') return { status: 'refused', reason: between };
 
