@@ -4,7 +4,7 @@ import { join } from 'node:path';
 import { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
 import { parseArgs } from 'node:util';
-import { demoFiles } from './generator/demoFiles';
+import { demoFiles, electricalFiles } from './generator/demoFiles';
 import { encodeLines } from './generator/encodeLines';
 import { largeFileLines } from './generator/largeFile';
 
@@ -29,7 +29,7 @@ async function generate(): Promise<void> {
 		await writeLines(join(values.out, `LKT-1130_${points}-points.csv`), largeFileLines(points));
 		return;
 	}
-	for (const file of demoFiles()) {
+	for (const file of [...demoFiles(), ...electricalFiles()]) {
 		await writeLines(join(values.out, file.fileName), file.lines());
 	}
 }

@@ -1,6 +1,7 @@
 import { atTemperature, capacitance } from './diode';
 import type { DemoProduct, DiodeLaw, Fault, Spread } from './diode';
 import { Random } from './random';
+import { seatOf } from './seat';
 
 /** The header of every generated file. */
 export const HEADER = 'lot,wafer,site,device,temperature [°C],frequency [Hz],V_R [V],C_tot [pF]';
@@ -23,8 +24,7 @@ export function* readingLines(product: DemoProduct, lot: string): Generator<stri
 		const ofWafer = spread(ofLot, product.waferSpread, random);
 		for (let device = 1; device <= product.devicesPerWafer; device++) {
 			const law = spread(ofWafer, product.deviceSpread, random);
-			const site = `X${((device - 1) % 5) + 1}Y${Math.floor((device - 1) / 5) + 1}`;
-			const name = `D${String(device).padStart(3, '0')}`;
+			const { site, name } = seatOf(device);
 			for (const temperature of product.temperatures) {
 				const fault = product.faults.find(
 					(of) =>

@@ -1,5 +1,6 @@
 import { Readable } from 'node:stream';
 import { requestedMapping } from '$lib/core/measurements/requestedMapping';
+import type { MeasurementSetup } from '$lib/core/measurements/setup';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
 import { listMeasurementSets } from '$lib/server/db/listMeasurementSets';
 import { listSuspects } from '$lib/server/db/listSuspects';
@@ -7,16 +8,18 @@ import { giveVerdict } from '$lib/server/services/giveVerdict';
 import { mapUpload } from '$lib/server/services/mapUpload';
 import { receiveUpload } from '$lib/server/services/receiveUpload';
 import type { Stores } from '$lib/server/work/stores';
-import { demoFiles } from '../generator/demoFiles';
+import { demoFiles, electricalFiles } from '../generator/demoFiles';
 import type { DemoFile } from '../generator/demoFiles';
 import { encodeLines } from '../generator/encodeLines';
 import { must } from './must';
 
-const SETUP = {
+/** How sweeps of the capacitance were measured, and how everything else. */
+const BRIDGE = {
 	instrument: 'LCR bridge, four-wire fixture',
 	signalLevelVolts: 0.05,
 	uncertainty: 0.003
 };
+const PARAMETRIC = { instrument: 'Parametric tester, four-wire fixture', uncertainty: 0.002 };
 
 /** Works the queue off; given by the seed, so that it can show what is going on. */
 export type WorkOff = () => Promise<void>;
@@ -27,13 +30,23 @@ export async function seedMeasurements(
 	by: string,
 	workOff: WorkOff
 ): Promise<void> {
-	for (const file of demoFiles()) await seedFile(stores, file, by, workOff);
+	for (const file of demoFiles()) await seedFile(stores, { file, setup: BRIDGE, by }, workOff);
+	for (const file of electricalFiles()) {
+		await seedFile(stores, { file, setup: PARAMETRIC, by }, workOff);
+	}
 }
 
 async function seedFile(
 	stores: Stores,
-	file: DemoFile,
-	by: string,
+	{
+		file,
+		setup,
+		by
+	}: {
+		readonly file: DemoFile;
+		readonly setup: Partial<MeasurementSetup>;
+		readonly by: string;
+	},
 	workOff: WorkOff
 ): Promise<void> {
 	const received = await receiveUpload(stores, {
@@ -46,7 +59,7 @@ async function seedFile(
 	const { upload } = must(received, 'received');
 	await workOff();
 	must(
-		await mapUpload(stores, { upload, request: requestedMapping.parse({ setup: SETUP }), by }),
+		await mapUpload(stores, { upload, request: requestedMapping.parse({ setup }), by }),
 		'mapped'
 	);
 	await workOff();
