@@ -59,12 +59,16 @@ function readBlocks(temperature: number): Float64Array[] {
 	);
 }
 
-function distributionsOf(temperature: number, blocks: readonly Float64Array[]): Distribution[] {
-	const index = indexDevices(
+/** Once for all conditions, as a job does it. */
+const index = measured('distributions', () =>
+	indexDevices(
 		[{ set: 1, chunks: plan.devices.map((devices, chunk) => ({ chunk, devices })) }],
 		plan.rowsPerBlock,
 		new Map()
-	);
+	)
+);
+
+function distributionsOf(temperature: number, blocks: readonly Float64Array[]): Distribution[] {
 	const columns = new ConditionColumns(index);
 	for (const [block, values] of blocks.entries()) {
 		columns.add(

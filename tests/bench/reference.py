@@ -201,9 +201,10 @@ def pairs(low, high):
 
 random = np.random.default_rng(1)
 results = {name: [] for name in ("fits", "means", "deviations", "lotComponents", "darling", "lots", "normal", "order", "sigma")}
-names = {key: np.concatenate([d[key] for d in plan["devices"]]) for key in ("lot", "wafer")}
-order = np.lexsort((names["wafer"], names["lot"]))
-lots, wafers = names["lot"][order], names["wafer"][order]
+with measured("distributions"):
+    names = {key: np.concatenate([d[key] for d in plan["devices"]]) for key in ("lot", "wafer")}
+    order = np.lexsort((names["wafer"], names["lot"]))
+    lots, wafers = names["lot"][order], names["wafer"][order]
 for temperature in plan["temperatures"]:
     with measured("read"):
         blocks = [

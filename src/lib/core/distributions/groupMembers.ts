@@ -16,14 +16,14 @@ export function groupMembers(
 	groups: readonly GroupName[]
 ): Members[] {
 	const sizes = new Int32Array(groups.length);
-	for (const [device, value] of values.entries()) {
-		if (!Number.isNaN(value)) sizes[groupOf[device] ?? -1]! += 1;
-	}
+	for (let device = 0; device < values.length; device++)
+		if (!Number.isNaN(values[device]!)) sizes[groupOf[device]!]! += 1;
 	const members = groups.map((_, group) => new Float64Array(sizes[group] ?? 0));
 	const filled = new Int32Array(groups.length);
-	for (const [device, value] of values.entries()) {
+	for (let device = 0; device < values.length; device++) {
+		const value = values[device]!;
 		if (Number.isNaN(value)) continue;
-		const group = groupOf[device] ?? -1;
+		const group = groupOf[device]!;
 		members[group]![filled[group]!++] = value;
 	}
 	return groups.flatMap((name, group) => {

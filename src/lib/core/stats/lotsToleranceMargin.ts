@@ -13,7 +13,8 @@ import {
 	splitStrata,
 	sumOfSpreads,
 	sumOfTwo,
-	totalVariance
+	totalVariance,
+	type VarianceSpread
 } from './varianceSpread';
 
 /** Spacing of the quadrature over the lots, in deviations: their few degrees matter most. */
@@ -118,30 +119,56 @@ function marginConfidence(strata: LotStrata, z: number, widening: number) {
 	const least = widening * leastSmoothing(within);
 	const surest = Math.max(0, least ** 2 - smoothing ** 2) / perError ** 2;
 
-	/** z·S and √(a/V_L) of every pair of nodes, and the weight of the pair. */
-	const size = between.values.length * inside.values.length;
+	const ofMean = between.values.map((lotVariance) => lotVariance / strata.lots + surest);
+	const pairs = pairNodes(between, inside, { z, ofMean });
+	return (margin: number) => weighPairs(pairs, margin);
+}
+
+/** Pairs of nodes: how far a limit must reach there, how sure the mean is, and how much it counts. */
+interface Pairs {
+	/** z·S */
+	readonly reach: Float64Array;
+	/** √(a/V_L) */
+	readonly inverse: Float64Array;
+	readonly weight: Float64Array;
+}
+
+function pairNodes(
+	between: VarianceSpread,
+	inside: VarianceSpread,
+	{ z, ofMean }: { readonly z: number; readonly ofMean: Float64Array }
+): Pairs {
+	const size = countPairs(between.weights, inside.weights);
 	const reach = new Float64Array(size);
 	const inverse = new Float64Array(size);
 	const weight = new Float64Array(size);
 	let count = 0;
 	for (let i = 0; i < between.values.length; i++) {
-		const lotVariance = between.values[i]!;
-		const ofMean = 1 / Math.sqrt(lotVariance / strata.lots + surest + Number.MIN_VALUE);
+		const inverseHere = 1 / Math.sqrt(ofMean[i]! + Number.MIN_VALUE);
 		for (let j = 0; j < inside.values.length; j++) {
 			const product = between.weights[i]! * inside.weights[j]!;
 			if (product < NEGLIGIBLE) continue;
-			reach[count] = z * Math.sqrt(lotVariance + inside.values[j]!);
-			inverse[count] = ofMean;
+			reach[count] = z * Math.sqrt(between.values[i]! + inside.values[j]!);
+			inverse[count] = inverseHere;
 			weight[count] = product;
 			count++;
 		}
 	}
-	return (margin: number) => {
-		let reached = 0;
-		for (let i = 0; i < count; i++)
-			reached += weight[i]! * tabulatedLowerTail((margin - reach[i]!) * inverse[i]!);
-		return reached;
-	};
+	return { reach, inverse, weight };
+}
+
+function countPairs(first: Float64Array, second: Float64Array): number {
+	let count = 0;
+	for (let i = 0; i < first.length; i++)
+		for (let j = 0; j < second.length; j++) if (first[i]! * second[j]! >= NEGLIGIBLE) count++;
+	return count;
+}
+
+function weighPairs({ reach, inverse, weight }: Pairs, margin: number): number {
+	let reached = 0;
+	for (let i = 0; i < reach.length; i++)
+		reached += weight[i]! * tabulatedLowerTail((margin - reach[i]!) * inverse[i]!);
+	return reached;
 }
 
 function halfWidthConfidence(strata: LotStrata, z: number, widening: number) {
