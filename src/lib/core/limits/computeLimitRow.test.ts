@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { limitationMessages } from '../messages/limitations';
 import { limitMessages } from '../messages/limits';
 import { roundOutward } from '../units/rounding';
 import { computeLimitRow } from './computeLimitRow';
@@ -141,6 +142,7 @@ describe('what is warned of', () => {
 			'15.0'
 		]);
 		expect(row.warnings).toEqual([
+			limitationMessages.pooledLots(),
 			limitMessages.equalsTypical('minimum'),
 			limitMessages.equalsTypical('maximum')
 		]);

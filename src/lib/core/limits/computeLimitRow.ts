@@ -149,7 +149,8 @@ function computeLimits(
 			...modelWarnings(distribution, {
 				lots,
 				isPooled,
-				restsOnNormality: rules.method === 'normal' || rules.method === 'lots'
+				method: rules.method,
+				span: rules.span
 			}),
 			...outcome.warnings,
 			...houseRule,
