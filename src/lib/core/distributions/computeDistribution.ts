@@ -1,3 +1,4 @@
+import { mapNumbers } from '../stats/mapNumbers';
 import { mean as meanOf } from '../stats/mean';
 import { quantile } from '../stats/quantile';
 import { skewness } from '../stats/skewness';
@@ -59,7 +60,7 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 	const { transform, values, censored } = input;
 	const censoring = censored && censoringOf({ values, censored });
 	const bounded = withinBounds(values, censoring);
-	const sorted = bounded.filter((value) => !Number.isNaN(value)).sort();
+	const sorted = presentOf(bounded).sort();
 	if (sorted.length === 0) return undefined;
 	const lowest = sorted[0] ?? Number.NaN;
 	if (transform !== 'identity' && lowest <= 0) throw new TransformDomainError(transform, lowest);
@@ -69,7 +70,7 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 	const all = groupMembers(bounded, input.groupOf, input.groups);
 	const members = censoring ? all.flatMap((of) => observedMembers(of, censoring)) : all;
 	const groups = members.map((of) => sumsOf(of, apply));
-	const transformed = (observed.length === 0 ? sorted : observed).map(apply);
+	const transformed = mapNumbers(observed.length === 0 ? sorted : observed, apply);
 	const mean = meanOf(transformed);
 	const sumOfSquares = sum(
 		groups.map((of) => of.sumOfSquares + of.sampleSize * (of.mean - mean) ** 2)
@@ -103,6 +104,14 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 	};
 }
 
+function presentOf(values: Float64Array): Float64Array {
+	const present = new Float64Array(values.length);
+	let count = 0;
+	for (let i = 0; i < values.length; i++)
+		if (!Number.isNaN(values[i]!)) present[count++] = values[i]!;
+	return present.slice(0, count);
+}
+
 /** Every device beyond a bound stands at the bound. */
 function withinBounds(values: Float64Array, censoring: Censoring | undefined): Float64Array {
 	if (censoring === undefined) return values;
@@ -125,15 +134,17 @@ function observedMembers({ name, sorted }: Members, { floor, ceiling }: Censorin
 
 /** Two passes: the mean first, then the squares around it. */
 function sumsOf({ name, sorted }: Members, apply: (value: number) => number): Group {
-	const transformed = sorted.map(apply);
+	const transformed = mapNumbers(sorted, apply);
 	const mean = meanOf(transformed);
+	let sumOfSquares = 0;
+	for (let i = 0; i < transformed.length; i++) sumOfSquares += (transformed[i]! - mean) ** 2;
 	return {
 		lot: name.lot,
 		waferLot: name.waferLot,
 		wafer: name.wafer,
 		sampleSize: transformed.length,
 		mean,
-		sumOfSquares: sum(transformed.map((y) => (y - mean) ** 2)),
+		sumOfSquares,
 		lowest: sorted[0] ?? Number.NaN,
 		highest: sorted.at(-1) ?? Number.NaN
 	};

@@ -1,3 +1,4 @@
+import { mapNumbers } from '../stats/mapNumbers';
 import type { DeviceIndex } from './indexDevices';
 
 /** A packed block, opened: one matrix of devices × biases at one temperature and frequency. */
@@ -70,7 +71,7 @@ export class ConditionColumns {
 			.sort(([a], [b]) => a - b)
 			.map(([bias, { sums, counts, sets }]) => ({
 				bias,
-				values: sums.map((sum, device) => sum / (counts[device] ?? 0)),
+				values: mapNumbers(sums, (sum, device) => sum / counts[device]!),
 				sets: [...sets].sort((a, b) => a - b)
 			}));
 	}

@@ -28,8 +28,7 @@ function transformedOf(lot: readonly Members[], apply: (value: number) => number
 	const all = new Float64Array(lot.reduce((size, { sorted }) => size + sorted.length, 0));
 	let filled = 0;
 	for (const { sorted } of lot) {
-		all.set(sorted.map(apply), filled);
-		filled += sorted.length;
+		for (let i = 0; i < sorted.length; i++) all[filled++] = apply(sorted[i]!);
 	}
 	return all;
 }
