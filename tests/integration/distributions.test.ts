@@ -11,11 +11,12 @@ import { findDistributions, type InterpolatedWanted } from '$lib/server/db/findD
 import { findJointDistribution } from '$lib/server/db/findJointDistribution';
 import { findMeasuredConditions } from '$lib/server/db/findMeasuredConditions';
 import { listEnteredDistributions } from '$lib/server/db/listEnteredDistributions';
-import { audit, distribution, product, readingBlock, verdict } from '$lib/server/db/schema';
+import { audit, distribution, job, product, readingBlock, verdict } from '$lib/server/db/schema';
 import { write } from '$lib/server/db/write';
 import { computeDistributions } from '$lib/server/services/computeDistributions';
 import { enterDistribution } from '$lib/server/services/enterDistribution';
 import { ensureTemplates } from '$lib/server/services/ensureTemplates';
+import { interpolateNow } from '$lib/server/services/interpolateNow';
 import { ENGINEER, insertAcceptedSet, insertProduct } from '../factories/acceptedSet';
 import { openTestDatabase } from '../factories/testDatabase';
 import { BIASES, columnOf, devices, FREQUENCY, SWEEP_KEY, sweeps } from '../factories/threeLots';
@@ -104,12 +105,46 @@ describe('biases between those that were measured', () => {
 		expect(all).not.toContain(-1);
 	});
 
+	it('are computed at once for a table that asks for one more, the same as by the job', async () => {
+		const at = { temperatureCelsius: 25, frequency: FREQUENCY };
+		const ask = (biases: number[]) => interpolateNow(opened.db, { ...scope, at, biases });
+		expect(await biasesAt([2.37])).toEqual(BIASES);
+		expect(await ask([2.37, 4, 12])).toEqual({ status: 'stored' });
+		expect(await biasesAt([2.37, 12])).toEqual([0, 1, 2.37, 4, 10]);
+
+		// The template's 3 V, computed by the job, and again by the request after it was removed.
+		const of = { ...scope, conditionKey: `${SWEEP_KEY};VR=3` };
+		const byJob = await findDistribution(opened.db, of);
+		await write(opened.db, (tx) =>
+			tx.delete(distribution).where(eq(distribution.conditionKey, of.conditionKey))
+		);
+		await ask([3]);
+		expect(byJob?.interpolated).toBe(true);
+		expect(await findDistribution(opened.db, of)).toEqual(byJob);
+	});
+
+	it('are left to a job when a table asks for very many', async () => {
+		const many = Array.from({ length: 50 }, (_, i) => 4.01 + i / 100);
+		const outcome = await interpolateNow(opened.db, {
+			...scope,
+			at: { temperatureCelsius: 25, frequency: FREQUENCY },
+			biases: many
+		});
+		expect(outcome).toMatchObject({ status: 'underway' });
+		const [queued] = await opened.db
+			.select()
+			.from(job)
+			.where(eq(job.kind, 'compute-distributions'));
+		expect(queued?.payload).toMatchObject({ product: productId, biases: many });
+		expect(await biasesAt(many)).toEqual(BIASES);
+	});
+
 	it('become a dense band when a job asks for one', async () => {
 		await compute({ isBand: true });
 		const all = await biasesAt('all');
-		// 4 measured, 5 of the template, 7.5 V, and at most 40 of the band.
+		// 4 measured, 5 of the template, 7.5 V and 2.37 V, and at most 40 of the band.
 		expect(all.length).toBeGreaterThan(40);
-		expect(all.length).toBeLessThanOrEqual(50);
+		expect(all.length).toBeLessThanOrEqual(51);
 		expect(await biasesAt()).toEqual(BIASES);
 	});
 });

@@ -3,15 +3,13 @@ import { z } from 'zod';
 import { denseBand } from '$lib/core/distributions/biasesBetween';
 import { indexDevices } from '$lib/core/distributions/indexDevices';
 import type { JointDistribution } from '$lib/core/distributions/jointDistribution';
-import { packGroups } from '$lib/core/distributions/packGroups';
 import { packJoint } from '$lib/core/distributions/packJoint';
 import { readConditionKey } from '$lib/core/distributions/readConditionKey';
-import type { Distribution } from '$lib/core/distributions/summary';
 import { CHUNK } from '$lib/core/measurements/blocks';
 import { limitMessages } from '$lib/core/messages/limits';
 import { appendAudit } from '../db/appendAudit';
 import type { Connection } from '../db/database';
-import { distribution, jointDistribution, product } from '../db/schema';
+import { jointDistribution, product } from '../db/schema';
 import { write } from '../db/write';
 import type { JobContext, JobHandler } from '../work/jobHandler';
 import { enqueueAssessment } from './assessReleases';
@@ -20,6 +18,7 @@ import { readBasis, type Basis } from './readBasis';
 import { readingDistribution } from './readingDistribution';
 import { readingSeries } from './readReadings';
 import { readDevices, sweepConditions } from './readSweeps';
+import { storeDistributions } from './storeDistributions';
 import { templateBiases } from './templateBiases';
 
 export const computeDistributionsPayload = z.object({
@@ -30,9 +29,6 @@ export const computeDistributionsPayload = z.object({
 	isBand: z.boolean().optional()
 });
 type ComputeDistributionsPayload = z.infer<typeof computeDistributionsPayload>;
-
-/** Rows of one transaction: 8 take about 2 ms to write. */
-const ROWS_A_WRITE = 8;
 
 export interface ComputedDistributions {
 	readonly basisHash: string | null;
@@ -56,7 +52,7 @@ export const computeDistributions: JobHandler = async ({ db }, payload, job) => 
 		const basis = await readBasis(db, productId);
 		if (basis === undefined) return { basisHash: null, distributions: 0 };
 
-		const stored = await storeDistributions(db, wanted, basis, job);
+		const stored = await computeAll(db, wanted, basis, job);
 		const isComplete = await complete(db, productId, basis, stored);
 		if (isComplete) {
 			return {
@@ -68,7 +64,7 @@ export const computeDistributions: JobHandler = async ({ db }, payload, job) => 
 	}
 };
 
-async function storeDistributions(
+async function computeAll(
 	db: Connection,
 	{ product: productId, biases = [], isBand = false }: ComputeDistributionsPayload,
 	basis: Basis,
@@ -92,45 +88,26 @@ async function storeDistributions(
 			sweepKey,
 			asked: (grid) => [...named, ...(isBand ? denseBand(grid) : [])]
 		});
-		stored += await storeRows(db, owner, [...measured, ...interpolated]);
+		await storeDistributions(db, owner, [...measured, ...interpolated]);
+		stored += measured.length + interpolated.length;
 		if (joint !== undefined) await storeJoint(db, owner, joint);
 	}
 	for (const [position, series] of readings.entries()) {
 		reportAt(sweeps.length + position, series.conditionKey);
 		const found = await readingDistribution(db, basis, devices, series);
-		if (found !== undefined) stored += await storeRows(db, owner, [found]);
+		if (found === undefined) continue;
+		await storeDistributions(db, owner, [found]);
+		stored += 1;
 	}
 	job.report({ done: total, total, words: limitMessages.computed(stored) });
 	return stored;
 }
 
-interface Owner {
-	readonly product: number;
-	readonly basisHash: string;
-}
-
-async function storeRows(
+async function storeJoint(
 	db: Connection,
-	owner: Owner,
-	distributions: readonly Distribution[]
-): Promise<number> {
-	for (let first = 0; first < distributions.length; first += ROWS_A_WRITE) {
-		const rows = distributions.slice(first, first + ROWS_A_WRITE).map((of) => {
-			const { groups, extremes, ...summary } = of;
-			return {
-				...owner,
-				characteristic: of.characteristic,
-				conditionKey: of.conditionKey,
-				summary,
-				groups: Buffer.from(packGroups({ groups, extremes }))
-			};
-		});
-		await write(db, (tx) => tx.insert(distribution).values(rows).onConflictDoNothing());
-	}
-	return distributions.length;
-}
-
-async function storeJoint(db: Connection, owner: Owner, joint: JointDistribution): Promise<void> {
+	owner: { readonly product: number; readonly basisHash: string },
+	joint: JointDistribution
+): Promise<void> {
 	const { characteristic, conditionKey } = joint;
 	const row = { ...owner, characteristic, conditionKey, joint: Buffer.from(packJoint(joint)) };
 	await write(db, (tx) => tx.insert(jointDistribution).values(row).onConflictDoNothing());

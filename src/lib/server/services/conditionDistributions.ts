@@ -58,25 +58,45 @@ export async function conditionDistributions(
 		groups: devices.groups
 	});
 
-	const grid = columns.map(({ bias }) => bias);
-	const between = grid.length < 2 ? [] : biasesBetween(grid, asked(grid));
-	if (between.length === 0) return { measured, interpolated: [], joint };
-	const curve = measured.map((of) => ({
-		bias: readConditionKey(of.conditionKey).reverseVoltage ?? 0,
-		median: medianOf(of)
-	}));
-	const potential = straighteningPotential(
-		curve.map(({ bias }) => bias),
-		curve.map(({ median }) => median)
-	);
-	const filled = await gather(db, basis, devices, sweepKey, (matrix) =>
+	const biases = asked(columns.map(({ bias }) => bias));
+	const interpolated = await interpolatedDistributions(db, basis, devices, {
+		sweepKey,
+		measured,
+		biases
+	});
+	return { measured, interpolated, joint };
+}
+
+/**
+ * Distributions of one temperature and frequency at biases between measured ones. The junction
+ * potential comes from the medians of the measured distributions, so that whenever it is asked a
+ * bias gets the same values.
+ *
+ * @param biases those that were measured, or lie outside of the measured range, are left out
+ */
+export async function interpolatedDistributions(
+	db: Database,
+	basis: Basis,
+	devices: DeviceIndex,
+	{
+		sweepKey,
+		measured,
+		biases
+	}: {
+		readonly sweepKey: string;
+		readonly measured: readonly Distribution[];
+		readonly biases: readonly number[];
+	}
+): Promise<Distribution[]> {
+	const grid = measured.map((of) => readConditionKey(of.conditionKey).reverseVoltage ?? 0);
+	const between = biasesBetween(grid, biases);
+	if (between.length === 0) return [];
+	const potential = straighteningPotential(grid, measured.map(medianOf));
+	const columns = await gather(db, basis, devices, sweepKey, (matrix) =>
 		interpolateSweeps(matrix, between, potential)
 	);
-	return {
-		measured,
-		interpolated: filled.flatMap((column) => summarize(column, potential) ?? []),
-		joint
-	};
+	const summarize = summarizer(basis, devices, sweepKey);
+	return columns.flatMap((column) => summarize(column, potential) ?? []);
 }
 
 /** The columns of a condition, without the sweeps that verdicts or quarantine leave out. */
