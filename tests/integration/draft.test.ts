@@ -96,7 +96,10 @@ describe('the templates', () => {
 		const { db } = bench.stores;
 		await ensureTemplates(bench.stores);
 		expect((await listTemplates(db)).map(({ key, number }) => [key, number])).toEqual([
+			['detector-mixer', 1],
+			['pin', 1],
 			['rectifier', 1],
+			['switching', 1],
 			['tuning', 1]
 		]);
 
@@ -115,7 +118,7 @@ describe('the templates', () => {
 
 			await writeFile(join(folder, 'tuning.json'), '{"key":1}');
 			await expect(ensureTemplates(bench.stores, folder)).rejects.toThrow(TemplateError);
-			expect(await db.select().from(templateVersion)).toHaveLength(3);
+			expect(await db.select().from(templateVersion)).toHaveLength(6);
 		} finally {
 			rmSync(folder, { recursive: true });
 		}
@@ -184,7 +187,7 @@ describe('binding everything that matches', () => {
 		expect(why.get('r_s at V_R = 4\u00a0V, f = 470\u00a0MHz, T_j = 25\u00a0°C')).toMatch(
 			/No stored measurement gives r_s/
 		);
-		expect(outcome.bound.length + outcome.left.length).toBe(28);
+		expect(outcome.bound.length + outcome.left.length).toBe(29);
 	});
 
 	it('prints the engine’s own digits, with their trace', async () => {

@@ -4,7 +4,12 @@ interface Conditions {
 	readonly reverseVoltage?: number | undefined;
 	readonly frequency?: number | undefined;
 	readonly temperatureCelsius?: number | undefined;
-	/** What the template adds: `I_F = 1 A`. */
+	readonly forwardCurrent?: number | undefined;
+	readonly reverseCurrent?: number | undefined;
+	readonly pulseDuration?: number | undefined;
+	/** In A/s. */
+	readonly currentSlope?: number | undefined;
+	/** What the template adds: `mounted on FR4`. */
 	readonly others?: string;
 }
 
@@ -14,13 +19,22 @@ export function conditionText(of: Conditions): string {
 		...(of.reverseVoltage === undefined
 			? []
 			: [`V_R = ${withUnit(String(of.reverseVoltage), 'V')}`]),
+		...engineering('I_F', of.forwardCurrent, 'A'),
+		...engineering('I_R', of.reverseCurrent, 'A'),
+		...(of.currentSlope === undefined
+			? []
+			: [`di_F/dt = ${withUnit(String(of.currentSlope / 1e6), 'A/µs')}`]),
+		...engineering('t_p', of.pulseDuration, 's'),
 		...(of.others === undefined || of.others === '' ? [] : [of.others]),
-		...(of.frequency === undefined ? [] : [`f = ${engineeringText(of.frequency, 'Hz')}`]),
+		...engineering('f', of.frequency, 'Hz'),
 		...(of.temperatureCelsius === undefined
 			? []
 			: [`T_j = ${temperatureText(of.temperatureCelsius)}`])
 	].join(', ');
 }
+
+const engineering = (symbol: string, value: number | undefined, unit: string): string[] =>
+	value === undefined ? [] : [`${symbol} = ${engineeringText(value, unit)}`];
 
 export function temperatureText(celsius: number): string {
 	return withUnit(String(celsius), '°C');

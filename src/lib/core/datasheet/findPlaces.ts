@@ -58,16 +58,13 @@ function characteristicPlace(input: ResolveInput, slot: LimitSlot, section: numb
 		slot: slot.slot,
 		bias: null,
 		section,
-		label: placeLabel(
-			symbolText(slot.symbol),
-			conditionText({ reverseVoltage, others: slot.conditions, frequency, temperatureCelsius })
-		),
+		label: placeLabel(symbolText(slot.symbol), conditionText({ ...slot, others: slot.conditions })),
 		essential: slot.essential,
 		name: slot.characteristic,
 		symbol: slot.symbol,
 		title: slot.name,
 		unit: slot.unit,
-		conditions: conditionText({ reverseVoltage, others: slot.conditions, frequency }),
+		conditions: conditionText({ ...slot, others: slot.conditions, temperatureCelsius: undefined }),
 		temperatureCelsius,
 		frequency: frequency ?? null,
 		reverseVoltage: reverseVoltage ?? null,

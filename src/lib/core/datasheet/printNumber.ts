@@ -37,7 +37,11 @@ const PREFIXES = [
 	[1e9, 'G'],
 	[1e6, 'M'],
 	[1e3, 'k'],
-	[1, '']
+	[1, ''],
+	[1e-3, 'm'],
+	[1e-6, 'µ'],
+	[1e-9, 'n'],
+	[1e-12, 'p']
 ] as const;
 
 /** A value of a condition in the unit a reader expects: 1 000 000 Hz is `1 MHz`. */

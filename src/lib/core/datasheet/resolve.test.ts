@@ -151,6 +151,7 @@ describe('a complete production draft', () => {
 			['ratings.repetitive-reverse-voltage', 'unbound'],
 			['ratings.forward-current', 'unbound'],
 			['ratings.storage-temperature', 'unbound'],
+			['thermal.junction-to-ambient', 'unbound'],
 			['characteristics.breakdown-voltage', 'unbound'],
 			['characteristics.capacitance-4v-85c', 'unbound']
 		]);
@@ -451,6 +452,7 @@ describe('the other statuses', () => {
 		expect(document.footnotes).toEqual([sheetTexts.target()]);
 		expect(document.sections.map(({ kind }) => kind)).toEqual([
 			'masthead',
+			'terminals',
 			'ordering',
 			'revision-history',
 			'notice'

@@ -6,7 +6,7 @@ import { checkStatus } from './checkStatus';
 import type { DatasheetDocument, DocumentSection } from './document';
 import { findPlaces } from './findPlaces';
 import { footnotes } from './footnotes';
-import type { Place } from './place';
+import { isPrinted, type Place } from './place';
 import type { DraftProblem, Resolved, ResolveInput } from './resolveInput';
 import { resolveChart } from './resolveChart';
 import { resolveHeadline } from './resolveHeadline';
@@ -116,7 +116,8 @@ function sectionOf(
 		case 'outline':
 			return present(resolveOutline(section, input));
 		case 'test-circuit': {
-			const { kind, heading, circuit, caption } = section;
+			const { kind, heading, circuit, caption, measures } = section;
+			if (!shown.some((place) => place.name === measures && isPrinted(place))) return [];
 			return [{ kind, heading, circuit, caption: symbolRuns(caption) }];
 		}
 		case 'model': {

@@ -41,7 +41,7 @@ describe('the project’s templates', () => {
 	it('state what their class must have', () => {
 		const essentials = (key: string) =>
 			readTemplate(readFileSync(`templates/${key}.json`, 'utf8'), key).sections.flatMap((one) =>
-				one.kind === 'ratings' || one.kind === 'characteristics'
+				one.kind === 'ratings' || one.kind === 'thermal' || one.kind === 'characteristics'
 					? one.slots.filter(({ essential }) => essential).map(({ slot }) => slot)
 					: []
 			);
@@ -61,9 +61,9 @@ describe('the project’s templates', () => {
 			'ratings.surge-current',
 			'ratings.junction-temperature',
 			'ratings.storage-temperature',
+			'characteristics.thermal-resistance',
 			'characteristics.forward-voltage',
-			'characteristics.reverse-current',
-			'characteristics.thermal-resistance'
+			'characteristics.reverse-current'
 		]);
 	});
 });
@@ -78,7 +78,7 @@ describe('what is no template is refused with its path', () => {
 			section(sections, 'capacitance-table')['temperatureCelsius'] = '25';
 		});
 		expect(problemsOf(text)).toEqual([
-			'sections.8.temperatureCelsius: Invalid input: expected number, received string'
+			'sections.10.temperatureCelsius: Invalid input: expected number, received string'
 		]);
 	});
 
@@ -89,7 +89,9 @@ describe('what is no template is refused with its path', () => {
 			section(sections, 'headline-figures')['slots'] = [];
 		});
 		expect(problemsOf(text)).toEqual([
-			'sections.8.slot: expected a key used once, got "ratings.reverse-voltage" again'
+			'sections.10.slot: expected a key used once, got "ratings.reverse-voltage" again',
+			'sections.13.source.table: expected the slot of a table, got "capacitance.25c"',
+			'sections.17.table: expected the slot of a table, got "capacitance.25c"'
 		]);
 	});
 
@@ -99,8 +101,8 @@ describe('what is no template is refused with its path', () => {
 			Object.assign(section(sections, 'capacitance-table'), { biases: [1, 1], ratioTo: 28 });
 		});
 		expect(problemsOf(text)).toEqual([
-			'sections.8.biases: expected biases that rise',
-			'sections.8.ratioTo: expected one of the biases, got 28'
+			'sections.10.biases: expected biases that rise',
+			'sections.10.ratioTo: expected one of the biases, got 28'
 		]);
 	});
 
@@ -111,7 +113,7 @@ describe('what is no template is refused with its path', () => {
 		});
 		expect(problemsOf(text)).toEqual([
 			'sections.2.slots.0: expected a slot of this template, got "capacitance.25c.29"',
-			'sections.9.table: expected the slot of a table, got "nowhere"'
+			'sections.11.table: expected the slot of a table, got "nowhere"'
 		]);
 	});
 });

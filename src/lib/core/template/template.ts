@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { condition } from '../characteristics/condition';
 import { letterSymbol } from '../characteristics/symbol';
 
 export const PRODUCT_CLASSES = [
@@ -49,11 +50,10 @@ export const limitSlot = z.object({
 	symbol: letterSymbol,
 	name: z.string(),
 	unit: z.string(),
-	/** Conditions beyond bias, frequency and temperature, with symbols as plain text: `I_F = 1 A`. */
+	/** Conditions that no reading is keyed by, with symbols as plain text: `mounted on FR4`. */
 	conditions: z.string().default(''),
-	temperatureCelsius: z.number(),
-	frequency: z.number().positive().optional(),
-	reverseVoltage: z.number().optional(),
+	/** What a reading is keyed by, in SI; the temperature in °C. */
+	...condition.shape,
 	/** Which of the three must be printed for the slot to count as bound. */
 	required: z.array(z.enum(['minimum', 'typical', 'maximum'])),
 	essential: z.boolean()
@@ -152,6 +152,8 @@ export const templateSection = z.discriminatedUnion('kind', [
 		kind: z.literal('test-circuit'),
 		heading,
 		circuit: testCircuit,
+		/** Key of the characteristic it measures: drawn where the sheet prints one. */
+		measures: z.string(),
 		caption: z.string()
 	}),
 	/** Parameters of a simulator's model, fitted to the typical values of a table. */
