@@ -9,6 +9,8 @@ export type Separator = (typeof SEPARATORS)[number];
  * does not end in the line.
  */
 export function splitLine(line: string, separator: Separator): string[] | undefined {
+	// Without a quote there is nothing to parse, and most lines have none.
+	if (!line.includes('"')) return line.split(separator).map((field) => field.trim());
 	const { data, errors } = Papa.parse<string[]>(line, {
 		delimiter: separator,
 		newline: '\n',
