@@ -1,14 +1,15 @@
 import { readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { z } from 'zod';
 import { ConditionColumns } from '../../src/lib/core/distributions/conditionColumns';
 import { computeDistribution } from '../../src/lib/core/distributions/computeDistribution';
-import { indexDevices, type DeviceNames } from '../../src/lib/core/distributions/indexDevices';
+import { indexDevices, type DeviceIndex } from '../../src/lib/core/distributions/indexDevices';
 import type { Distribution } from '../../src/lib/core/distributions/summary';
 import { RESULT_WIDTH } from '../../src/lib/core/junction/capacitanceFitResult';
 import { fitSweeps } from '../../src/lib/core/junction/fitCapacitance';
 import { computeLimitRow } from '../../src/lib/core/limits/computeLimitRow';
 import { limitPolicy, type LimitMethod } from '../../src/lib/core/limits/policy';
-import { unpackMatrix } from '../../src/lib/core/measurements/blocks';
+import { deviceColumns, unpackMatrix } from '../../src/lib/core/measurements/blocks';
 
 /*
  * The engine's side of the benchmark: from packed blocks on disk to fits, distributions with their
@@ -16,16 +17,16 @@ import { unpackMatrix } from '../../src/lib/core/measurements/blocks';
  * file as JSON.
  */
 
-interface Plan {
-	readonly biases: readonly number[];
-	readonly temperatures: readonly number[];
-	readonly rowsPerBlock: number;
-	readonly blocks: number;
-	readonly devices: readonly DeviceNames[];
-}
-
 const folder = process.argv[2] ?? '.';
-const plan: Plan = JSON.parse(readFileSync(join(folder, 'plan.json'), 'utf8'));
+const plan = z
+	.object({
+		biases: z.array(z.number()),
+		temperatures: z.array(z.number()),
+		rowsPerBlock: z.number(),
+		blocks: z.number(),
+		devices: z.array(deviceColumns)
+	})
+	.parse(JSON.parse(readFileSync(join(folder, 'plan.json'), 'utf8')));
 
 /** The four methods with what they are asked for in a table of both sides. */
 const POLICIES = (['lots', 'normal', 'order', 'sigma'] as const).map((method) =>
@@ -42,7 +43,7 @@ const POLICIES = (['lots', 'normal', 'order', 'sigma'] as const).map((method) =>
 	})
 );
 
-const spent: Record<string, number> = {};
+let spent: Record<string, number> = {};
 
 /** CPU time of the process, so that a busy machine does not count. */
 function measured<Result>(name: string, work: () => Result): Result {
@@ -59,16 +60,11 @@ function readBlocks(temperature: number): Float64Array[] {
 	);
 }
 
-/** Once for all conditions, as a job does it. */
-const index = measured('distributions', () =>
-	indexDevices(
-		[{ set: 1, chunks: plan.devices.map((devices, chunk) => ({ chunk, devices })) }],
-		plan.rowsPerBlock,
-		new Map()
-	)
-);
-
-function distributionsOf(temperature: number, blocks: readonly Float64Array[]): Distribution[] {
+function distributionsOf(
+	temperature: number,
+	blocks: readonly Float64Array[],
+	index: DeviceIndex
+): Distribution[] {
 	const columns = new ConditionColumns(index);
 	for (const [block, values] of blocks.entries()) {
 		columns.add(
@@ -108,42 +104,60 @@ function rowOf(distribution: Distribution, method: LimitMethod, temperature: num
 	});
 }
 
-const fits: number[] = [];
-const means: number[] = [];
-const deviations: number[] = [];
-const lotComponents: number[] = [];
-const darling: number[] = [];
-const limits: Record<string, number[]> = { lots: [], normal: [], order: [], sigma: [] };
-const kept: Distribution[] = [];
-let fitted = 0;
+/** The whole work once. */
+function work() {
+	spent = {};
+	const fits: number[] = [];
+	const means: number[] = [];
+	const deviations: number[] = [];
+	const lotComponents: number[] = [];
+	const darling: number[] = [];
+	const limits: Record<string, number[]> = { lots: [], normal: [], order: [], sigma: [] };
+	const kept: Distribution[] = [];
+	let fitted = 0;
+	const index = measured('distributions', () =>
+		indexDevices(
+			[{ set: 1, chunks: plan.devices.map((devices, chunk) => ({ chunk, devices })) }],
+			plan.rowsPerBlock,
+			new Map()
+		)
+	);
 
-for (const temperature of plan.temperatures) {
-	const blocks = measured('read', () => readBlocks(temperature));
-	for (const block of blocks) {
-		const result = measured('fits', () => fitSweeps(plan.biases, block));
-		fitted += result.length / RESULT_WIDTH;
-		for (let i = 0; i < result.length; i++) if (i % RESULT_WIDTH < 4) fits.push(result[i]!);
-	}
-	const distributions = measured('distributions', () => distributionsOf(temperature, blocks));
-	for (const distribution of distributions) {
-		means.push(distribution.mean);
-		deviations.push(distribution.standardDeviation);
-		lotComponents.push(distribution.components?.lot.estimate ?? Number.NaN);
-		darling.push(distribution.normality?.statistic ?? Number.NaN);
-	}
-	for (const { method } of POLICIES) {
-		const rows = measured(method, () =>
-			distributions.map((distribution, i) =>
-				rowOf(distribution, method, temperature, plan.biases[i] ?? 0)
-			)
-		);
-		for (const { refusals, minimum, maximum } of rows) {
-			if (refusals.length > 0) throw new Error(`${method}: ${refusals.join(' ')}`);
-			limits[method]?.push(minimum?.raw ?? Number.NaN, maximum?.raw ?? Number.NaN);
+	for (const temperature of plan.temperatures) {
+		const blocks = measured('read', () => readBlocks(temperature));
+		for (const block of blocks) {
+			const result = measured('fits', () => fitSweeps(plan.biases, block));
+			fitted += result.length / RESULT_WIDTH;
+			for (let i = 0; i < result.length; i++) if (i % RESULT_WIDTH < 4) fits.push(result[i]!);
 		}
+		const distributions = measured('distributions', () =>
+			distributionsOf(temperature, blocks, index)
+		);
+		for (const distribution of distributions) {
+			means.push(distribution.mean);
+			deviations.push(distribution.standardDeviation);
+			lotComponents.push(distribution.components?.lot.estimate ?? Number.NaN);
+			darling.push(distribution.normality?.statistic ?? Number.NaN);
+		}
+		for (const { method } of POLICIES) {
+			const rows = measured(method, () =>
+				distributions.map((distribution, i) =>
+					rowOf(distribution, method, temperature, plan.biases[i] ?? 0)
+				)
+			);
+			for (const { refusals, minimum, maximum } of rows) {
+				if (refusals.length > 0) throw new Error(`${method}: ${refusals.join(' ')}`);
+				limits[method]?.push(minimum?.raw ?? Number.NaN, maximum?.raw ?? Number.NaN);
+			}
+		}
+		kept.push(...distributions);
 	}
-	kept.push(...distributions);
+	const results = { fits, means, deviations, lotComponents, darling, ...limits };
+	return { spent, fitted, kept, results };
 }
+
+const first = work();
+const { kept, fitted, ...second } = work();
 
 /** A what-if as a person meets it: one row, another confidence each time, median of many. */
 const whatIf = Object.fromEntries(
@@ -160,9 +174,10 @@ const whatIf = Object.fromEntries(
 writeFileSync(
 	join(folder, 'engine.json'),
 	JSON.stringify({
-		spent,
-		fitMicroseconds: ((spent['fits'] ?? 0) * 1e6) / fitted,
+		first: first.spent,
+		spent: second.spent,
+		fitMicroseconds: ((second.spent['fits'] ?? 0) * 1e6) / fitted,
 		whatIf,
-		results: { fits, means, deviations, lotComponents, darling, ...limits }
+		results: second.results
 	})
 );

@@ -199,49 +199,53 @@ def pairs(low, high):
     return np.exp(np.stack([low, high], axis=1)).ravel()
 
 
-random = np.random.default_rng(1)
-results = {name: [] for name in ("fits", "means", "deviations", "lotComponents", "darling", "lots", "normal", "order", "sigma")}
-with measured("distributions"):
-    names = {key: np.concatenate([d[key] for d in plan["devices"]]) for key in ("lot", "wafer")}
-    order = np.lexsort((names["wafer"], names["lot"]))
-    lots, wafers = names["lot"][order], names["wafer"][order]
-for temperature in plan["temperatures"]:
-    with measured("read"):
-        blocks = [
-            np.frombuffer((folder / f"{temperature}-{b}.bin").read_bytes(), dtype="<f8").reshape(-1, len(V))
-            for b in range(plan["blocks"])
-        ]
-    for block in blocks:
-        with measured("fits"):
-            found = fit(block)
-        results["fits"].append(found.ravel())
+def work():
+    spent.clear()
+    random = np.random.default_rng(1)
+    results = {name: [] for name in ("fits", "means", "deviations", "lotComponents", "darling", "lots", "normal", "order", "sigma")}
     with measured("distributions"):
-        y = np.log(np.concatenate(blocks)[order])
-        n = len(y)
-        sums = nested_sums(y, lots, wafers)
-        grand, lot_variance, _, _ = components(*sums)
-        deviation = y.std(axis=0, ddof=1)
-        skewness = stats.skew(y, axis=0)
-        y_sorted = np.sort(y, axis=0)
-        quantiles = np.quantile(y_sorted, PROBABILITIES, axis=0, method="median_unbiased")
-        darling = anderson_darling(y, lots)
-    with measured("lots"):
-        parts = strata(*sums)
-        margin = lots_margin(parts, random)
-        results["lots"].append(pairs(parts[0] - margin, parts[0] + margin))
-    with measured("normal"):
-        factor = stats.nct.ppf(SHARED, n - 1, stats.norm.ppf(P) * np.sqrt(n)) / np.sqrt(n)
-        results["normal"].append(pairs(grand - factor * deviation, grand + factor * deviation))
-    with measured("order"):
-        rank = int(stats.binom.ppf(1 - SHARED, n, 1 - P))
-        while stats.binom.sf(rank - 1, n, 1 - P) < SHARED:
-            rank -= 1
-        results["order"].append(pairs(y_sorted[rank - 1], y_sorted[n - rank]))
-    with measured("sigma"):
-        results["sigma"].append(pairs(grand - 4 * deviation, grand + 4 * deviation))
-    for name, value in (("means", grand), ("deviations", deviation), ("lotComponents", lot_variance), ("darling", darling)):
-        results[name].append(value)
+        names = {key: np.concatenate([d[key] for d in plan["devices"]]) for key in ("lot", "wafer")}
+        order = np.lexsort((names["wafer"], names["lot"]))
+        lots, wafers = names["lot"][order], names["wafer"][order]
+    for temperature in plan["temperatures"]:
+        with measured("read"):
+            blocks = [
+                np.frombuffer((folder / f"{temperature}-{b}.bin").read_bytes(), dtype="<f8").reshape(-1, len(V))
+                for b in range(plan["blocks"])
+            ]
+        for block in blocks:
+            with measured("fits"):
+                found = fit(block)
+            results["fits"].append(found.ravel())
+        with measured("distributions"):
+            y = np.log(np.concatenate(blocks)[order])
+            n = len(y)
+            sums = nested_sums(y, lots, wafers)
+            grand, lot_variance, _, _ = components(*sums)
+            deviation = y.std(axis=0, ddof=1)
+            skewness = stats.skew(y, axis=0)
+            y_sorted = np.sort(y, axis=0)
+            quantiles = np.quantile(y_sorted, PROBABILITIES, axis=0, method="median_unbiased")
+            darling = anderson_darling(y, lots)
+        with measured("lots"):
+            parts = strata(*sums)
+            margin = lots_margin(parts, random)
+            results["lots"].append(pairs(parts[0] - margin, parts[0] + margin))
+        with measured("normal"):
+            factor = stats.nct.ppf(SHARED, n - 1, stats.norm.ppf(P) * np.sqrt(n)) / np.sqrt(n)
+            results["normal"].append(pairs(grand - factor * deviation, grand + factor * deviation))
+        with measured("order"):
+            rank = int(stats.binom.ppf(1 - SHARED, n, 1 - P))
+            while stats.binom.sf(rank - 1, n, 1 - P) < SHARED:
+                rank -= 1
+            results["order"].append(pairs(y_sorted[rank - 1], y_sorted[n - rank]))
+        with measured("sigma"):
+            results["sigma"].append(pairs(grand - 4 * deviation, grand + 4 * deviation))
+        for name, value in (("means", grand), ("deviations", deviation), ("lotComponents", lot_variance), ("darling", darling)):
+            results[name].append(value)
+    return dict(spent), {k: np.concatenate(v).tolist() for k, v in results.items()}
 
-(folder / "reference.json").write_text(
-    json.dumps({"spent": spent, "results": {k: np.concatenate(v).tolist() for k, v in results.items()}})
-)
+
+first, _ = work()
+second, numbers = work()
+(folder / "reference.json").write_text(json.dumps({"first": first, "spent": second, "results": numbers}))
