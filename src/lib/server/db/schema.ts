@@ -376,6 +376,24 @@ export const jointDistribution = sqliteTable(
 	]
 );
 
+/** The fitted laws of all devices at one temperature and frequency, summed up. */
+export const sweepFit = sqliteTable(
+	'sweep_fit',
+	{
+		id: integer().primaryKey({ autoIncrement: true }),
+		product: integer()
+			.notNull()
+			.references(() => product.id),
+		/** `conditionKey` of core, without a bias. */
+		conditionKey: text().notNull(),
+		/** Hash of the sets and verdicts behind it. */
+		basisHash: text().notNull(),
+		/** `sweepFits` of core. */
+		fits: text({ mode: 'json' }).notNull()
+	},
+	(table) => [uniqueIndex('sweep_fit_once').on(table.product, table.conditionKey, table.basisHash)]
+);
+
 /**
  * Distributions somebody entered because only their summary exists. Append-only: the newest of a
  * condition holds, and only where nothing is measured.
