@@ -13,6 +13,7 @@ import {
 	splitStrata,
 	sumOfSpreads,
 	sumOfTwo,
+	tailVariance,
 	totalVariance,
 	type VarianceSpread
 } from './varianceSpread';
@@ -114,7 +115,9 @@ function marginConfidence(strata: LotStrata, z: number, widening: number) {
 	/** An error of the mean moves a limit as an error of 2√(V_L/a)·√V/z in the variance would. */
 	const perError = Math.sqrt(totalVariance(strata)) / Math.abs(z);
 	const smoothing = Math.sqrt(lots.variance / strata.lots) * perError;
-	const inside = sumOfSpreads(within, smoothing, widening);
+	const furthest = Math.abs(z) * Math.sqrt(tailVariance(strata.strata));
+	const inTail = (2 * Math.sqrt(lots.variance / strata.lots)) / furthest;
+	const inside = sumOfSpreads(within, { central: smoothing, inTail }, widening);
 	/** Where lots are so alike that the quadrature can't follow, the mean is taken for a little less sure. */
 	const least = widening * leastSmoothing(within);
 	const surest = Math.max(0, least ** 2 - smoothing ** 2) / perError ** 2;
@@ -176,7 +179,12 @@ function halfWidthConfidence(strata: LotStrata, z: number, widening: number) {
 	const ofBoth = { ...lots, share: 1 + 1 / strata.lots };
 	const innermost = deviationOf(ofBoth) < leastSmoothing(within) ? widestOf(within) : ofBoth;
 	const others = within.filter((stratum) => stratum !== innermost);
-	const belowLots = sumOfSpreads(others, deviationOf(innermost) / 2.5, widening);
+	const inTail = deviationOf(innermost) / tailVariance([ofBoth, ...within]);
+	const belowLots = sumOfSpreads(
+		others,
+		{ central: deviationOf(innermost) / 2.5, inTail },
+		widening
+	);
 	const outside =
 		innermost === ofBoth
 			? belowLots

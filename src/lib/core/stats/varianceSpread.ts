@@ -1,3 +1,4 @@
+import { chiSquareQuantile } from './chiSquare';
 import { OutsideDomainError } from './errors';
 import { logChiSquareRule } from './logChiSquareRule';
 import type { LotStrata, Stratum } from './lotStrata';
@@ -46,28 +47,56 @@ export function sumOfTwo(first: VarianceSpread, second: VarianceSpread): Varianc
 export const deviationOf = ({ variance, degrees, share }: Stratum) =>
 	Math.sqrt(2 / degrees) * share * variance;
 
+/** How smooth the stratum left out makes the integrand over the others. */
+export interface Smoothing {
+	/** About the middle, in units of variance. */
+	readonly central: number;
+	/** Where the limit is decided, far out: relative to the variance there. */
+	readonly inTail: number;
+}
+
+/** A stratum with fewer degrees reaches into the tail where the limit is decided. */
+const REACHES_TAIL = 30;
+
+/** So many deviations of a smoothing may lie between nodes; the rule's error is then below 1e-5. */
+const TAIL_STEP = 1.3;
+
 /**
  * The generalized variances of several strata together. What the stratum left out does to a limit
  * smooths the integrand over these; the less it does, the finer they must be taken.
  *
- * @param smoothing - in units of variance
  * @param widening - of every step, for a first look
  */
 export function sumOfSpreads(
 	strata: readonly Stratum[],
-	smoothing: number,
+	smoothing: Smoothing,
 	widening: number
 ): VarianceSpread {
-	let smooth = smoothing;
+	let smooth = smoothing.central;
 	const spreads = strata.map((stratum) => {
+		const { degrees } = stratum;
 		const deviation = deviationOf(stratum);
-		const widest = stratum.degrees > 30 ? WIDEST_STEP : WIDEST_STEP / 2;
-		const step = deviation > 0 ? Math.min(widest, smooth / deviation) : widest;
+		const widest = degrees > 30 ? WIDEST_STEP : WIDEST_STEP / 2;
+		const central = deviation > 0 ? smooth / deviation : widest;
+		const ofLogarithm = Math.sqrt(2 / degrees + 1 / (degrees * degrees));
+		const inTail = degrees > REACHES_TAIL ? widest : (TAIL_STEP * smoothing.inTail) / ofLogarithm;
 		smooth = Math.hypot(smooth, deviation);
+		const step = Math.min(widest, central, inTail);
 		return spreadOf(stratum, widening * Math.max(FINEST_STEP, step));
 	});
 	return spreads.reduce(sumOfTwo, NOTHING);
 }
+
+/** How large the whole variance may be: every stratum at its upper twentieth. */
+export function tailVariance(strata: readonly Stratum[]): number {
+	return strata.reduce(
+		(sum, { variance, degrees, share }) =>
+			sum + (share * variance * degrees) / chiSquareQuantile(TWENTIETH, degrees),
+		0
+	);
+}
+
+const TWENTIETH = 0.05;
 
 /** Half the finest step within lots, in units of variance: below it a smoothing can't be followed. */
 export function leastSmoothing(within: readonly Stratum[]): number {
