@@ -1,6 +1,15 @@
+import fc from 'fast-check';
 import { expect, it } from 'vitest';
-import { censoredMaximum, censoredMinimum, censoredNormalFit } from './censoredNormal';
+import {
+	censoredFitOfSums,
+	censoredMaximum,
+	censoredMaximumOfSums,
+	censoredMinimum,
+	censoredMinimumOfSums,
+	censoredNormalFit
+} from './censoredNormal';
 import { OutsideDomainError, SampleTooSmallError } from './errors';
+import { groupSums } from './groupSums';
 import { mean } from './mean';
 import { standardDeviation } from './standardDeviation';
 import { oneSidedToleranceFactor } from './toleranceFactor';
@@ -51,4 +60,38 @@ it('refuses two exact readings, and readings without spread', () => {
 	expect(() => censoredMaximum(few, PROMISE)).toThrow(SampleTooSmallError);
 	const still = { exact: [1, 1, 1], atMost: [0.5], atLeast: [] };
 	expect(() => censoredNormalFit(still)).toThrow(OutsideDomainError);
+});
+
+it('needs only sums and counts of the readings, to 1 part in 10¹⁰', () => {
+	const reading = fc.double({ min: -3, max: 3, noNaN: true });
+	fc.assert(
+		fc.property(
+			fc.array(reading, { minLength: 5, maxLength: 40 }),
+			fc.integer({ min: 0, max: 8 }),
+			fc.integer({ min: 0, max: 8 }),
+			(exact, below, above) => {
+				fc.pre(standardDeviation(exact) > 0.3);
+				const [floor, ceiling] = [Math.min(...exact) - 0.1, Math.max(...exact) + 0.1];
+				const sample = {
+					exact,
+					atMost: new Array<number>(below).fill(floor),
+					atLeast: new Array<number>(above).fill(ceiling)
+				};
+				const sums = {
+					observed: groupSums(exact),
+					atMost: [{ count: below, bound: floor }],
+					atLeast: [{ count: above, bound: ceiling }]
+				};
+				const [fit, fitOfSums] = [censoredNormalFit(sample), censoredFitOfSums(sums)];
+				expect(fitOfSums.mean).toBeCloseTo(fit.mean, 10);
+				expect(fitOfSums.standardDeviation / fit.standardDeviation).toBeCloseTo(1, 10);
+				expect(fitOfSums.logLikelihood).toBeCloseTo(fit.logLikelihood, 9);
+				const highest = censoredMaximum(sample, PROMISE);
+				expect(censoredMaximumOfSums(sums, PROMISE) / highest).toBeCloseTo(1, 10);
+				const lowest = censoredMinimum(sample, PROMISE);
+				expect(censoredMinimumOfSums(sums, PROMISE) / lowest).toBeCloseTo(1, 10);
+			}
+		),
+		{ numRuns: 60 }
+	);
 });
