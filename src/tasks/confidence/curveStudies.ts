@@ -72,7 +72,7 @@ function study({ lots, lotShare, isPluggedIn }: BandStudy): Study {
 	return {
 		method: 'whole curve',
 		promises: isPluggedIn ? ['between'] : ['one limit', 'between'],
-		shape: `lots of ${SIZE}, ${POINTS} points, ${isPluggedIn ? 'estimated' : 'known'} covariance`,
+		shape: `lots of ${SIZE}, ${POINTS} points, ${isPluggedIn ? `estimated covariance, lot share ${lotShare}` : 'known covariance'}`,
 		lotSizes: Array.from({ length: lots }, () => SIZE),
 		lotShare,
 		...(isPluggedIn ? { atMost: AT_MOST } : {}),

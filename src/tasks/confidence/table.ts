@@ -33,11 +33,7 @@ export function confidenceTable(cells: readonly Cell[]): string {
 			LOT_SHARES.flatMap((share) =>
 				ofRow.filter((cell) => cell.lotSizes.length === count && cell.lotShare === share)
 			)
-				.map((cell) =>
-					LOT_SHARES.length > ofRow.length / counts.length && ofRow.length < LOT_SHARES.length
-						? `${cellText(cell)} (share ${cell.lotShare})`
-						: cellText(cell)
-				)
+				.map(cellText)
 				.join(' ')
 		);
 		return [row, ...columns];

@@ -144,7 +144,7 @@ it('keeps just the confidence asked for, also far out', () => {
 		fc.double({ min: 1e-6, max: 1, noNaN: true }),
 		fc.constantFrom(1e-9, 1e4)
 	);
-	const content = fc.constantFrom(0.5001, 0.9, 0.99, 0.9999, 0.999999);
+	const content = fc.constantFrom(0.8, 0.9, 0.99, 0.9999, 0.999999);
 	const confidence = fc.constantFrom(0.5, 0.9, 0.95, 0.975, 0.999);
 	fc.assert(
 		fc.property(
