@@ -54,6 +54,7 @@ const JOB_NAMES: Readonly<Record<string, string>> = {
 	'read-upload': 'Reading a file',
 	'import-measurement-set': 'Importing a measurement set',
 	'compute-distributions': 'Computing the distributions',
+	'fit-sweeps': 'Fitting the sweeps of each device',
 	'assess-releases': 'Comparing published limits with newer data',
 	'simulate-widening': 'Simulating the factor for a whole curve',
 	'render-proof': 'Drawing a proof',

@@ -14,6 +14,7 @@ import { write } from '../db/write';
 import type { JobContext, JobHandler } from '../work/jobHandler';
 import { enqueueAssessment } from './assessReleases';
 import { conditionDistributions } from './conditionDistributions';
+import { enqueueFits } from './fitSweepsJob';
 import { readBasis, type Basis } from './readBasis';
 import { readingDistribution } from './readingDistribution';
 import { readingSeries } from './readReadings';
@@ -127,7 +128,10 @@ async function complete(
 		if (now.completeHash === basisHash) return true;
 
 		await tx.update(product).set({ basisHash }).where(eq(product.id, productId));
-		if (basisHash !== null) await enqueueAssessment(tx, productId, basisHash);
+		if (basisHash !== null) {
+			await enqueueAssessment(tx, productId, basisHash);
+			await enqueueFits(tx, productId, basisHash);
+		}
 		await appendAudit(tx, {
 			action: 'distributions.compute',
 			subject: basis.inputs.partNumber,

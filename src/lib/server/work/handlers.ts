@@ -1,6 +1,7 @@
 import { assessReleases } from '../services/assessReleases';
 import { computeDistributions } from '../services/computeDistributions';
 import { importMeasurementSet } from '../services/importMeasurementSet';
+import { fitSweepsJob } from '../services/fitSweepsJob';
 import { publishReleaseJob } from '../services/publishReleaseJob';
 import { simulateWideningJob } from '../services/curveWidening';
 import { readUpload } from '../services/readUpload';
@@ -13,6 +14,7 @@ export const handlers: Readonly<Record<string, JobHandler>> = {
 	'read-upload': readUpload,
 	'import-measurement-set': importMeasurementSet,
 	'compute-distributions': computeDistributions,
+	'fit-sweeps': fitSweepsJob,
 	'assess-releases': assessReleases,
 	'simulate-widening': simulateWideningJob,
 	'verify-evidence': verifyEvidence,
