@@ -12,7 +12,6 @@ import {
 	spreadOf,
 	splitStrata,
 	sumOfSpreads,
-	sumOfTwo,
 	tailVariance,
 	totalVariance,
 	type VarianceSpread
@@ -20,6 +19,9 @@ import {
 
 /** Spacing of the quadrature over the lots, in deviations: their few degrees matter most. */
 const LOT_STEP = 0.3;
+
+/** Where the others alone use up a half-width, the confidence ends in an edge as sharp as this. */
+const EDGE = 0.1;
 
 /** A first solution on a rule this much wider tells where to look with the fine one. */
 const SCOUT = 2;
@@ -60,7 +62,7 @@ export function lotsMarginConfidence(
 /**
  * Half the distance between limits that hold the content *between both* for future lots: the
  * γ-quantile of z·√(V_L(1 + 1/a) + …), z the quantile of (1 + P)/2. The innermost integral, over the
- * lots unless they hardly vary, is a chi-square tail.
+ * stratum that reaches furthest, is a chi-square tail.
  *
  * Source: Liao, Lin and Iyer 2005, Technometrics 47; Krishnamoorthy and Mathew 2009, section 4.5.
  *
@@ -177,18 +179,14 @@ function weighPairs({ reach, inverse, weight }: Pairs, margin: number): number {
 function halfWidthConfidence(strata: LotStrata, z: number, widening: number) {
 	const [lots, within] = splitStrata(strata);
 	const ofBoth = { ...lots, share: 1 + 1 / strata.lots };
-	const innermost = deviationOf(ofBoth) < leastSmoothing(within) ? widestOf(within) : ofBoth;
-	const others = within.filter((stratum) => stratum !== innermost);
-	const inTail = deviationOf(innermost) / tailVariance([ofBoth, ...within]);
-	const belowLots = sumOfSpreads(
-		others,
+	const all = [ofBoth, ...within];
+	const innermost = furthestOf(all);
+	const inTail = Math.min(EDGE, deviationOf(innermost) / tailVariance(all));
+	const outside = sumOfSpreads(
+		all.filter((stratum) => stratum !== innermost),
 		{ central: deviationOf(innermost) / 2.5, inTail },
 		widening
 	);
-	const outside =
-		innermost === ofBoth
-			? belowLots
-			: sumOfTwo(spreadOf(ofBoth, (widening * LOT_STEP) / 2), belowLots);
 	const sumOfSquares = innermost.share * innermost.variance * innermost.degrees;
 	return (halfWidth: number) => {
 		const variance = (halfWidth / z) ** 2;
@@ -202,7 +200,7 @@ function halfWidthConfidence(strata: LotStrata, z: number, widening: number) {
 	};
 }
 
-/** The stratum whose variance is least certain. */
-function widestOf(strata: readonly Stratum[]): Stratum {
-	return strata.reduce((a, b) => (deviationOf(b) > deviationOf(a) ? b : a));
+/** The stratum whose variance may be the largest. */
+function furthestOf(strata: readonly Stratum[]): Stratum {
+	return strata.reduce((a, b) => (tailVariance([b]) > tailVariance([a]) ? b : a));
 }
