@@ -2,22 +2,26 @@ import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
+import { findCharacteristic } from '$lib/core/characteristics/catalogue';
 import { indexDevices } from '$lib/core/distributions/indexDevices';
 import { CHUNK } from '$lib/core/measurements/blocks';
+import { ReadingTable } from '$lib/core/measurements/readingTable';
 import { requestedMapping } from '$lib/core/measurements/requestedMapping';
 import { measurementMessages } from '$lib/core/messages/measurements';
+import { UNITS } from '$lib/core/units/unit';
 import type { OpenDatabase } from '$lib/server/db/client';
 import { findMeasurementSet } from '$lib/server/db/findMeasurementSet';
 import { findUpload } from '$lib/server/db/findUpload';
 import { listSuspects } from '$lib/server/db/listSuspects';
-import { readingBlock, sweepBlock } from '$lib/server/db/schema';
+import { measurementSet, readingBlock, sweepBlock } from '$lib/server/db/schema';
 import { exportSet } from '$lib/server/services/exportSet';
 import { giveVerdict } from '$lib/server/services/giveVerdict';
 import { mapUpload } from '$lib/server/services/mapUpload';
 import { readBasis } from '$lib/server/services/readBasis';
 import { readingSeries, readingsOf } from '$lib/server/services/readReadings';
-import { readDevices } from '$lib/server/services/readSweeps';
+import { readDevices, readSweeps, sweepConditions } from '$lib/server/services/readSweeps';
 import { receiveUpload } from '$lib/server/services/receiveUpload';
+import { openStagedSet, stageReadings } from '$lib/server/services/stageSet';
 import { folderStorage } from '$lib/server/storage/folderStorage';
 import { handlers } from '$lib/server/work/handlers';
 import { runOpenJobs } from '$lib/server/work/runOpenJobs';
@@ -212,6 +216,43 @@ describe('a file of readings', () => {
 	});
 });
 
+describe('an import of readings that broke off', () => {
+	it('leaves nothing behind once it is tried again', async () => {
+		const received = await receiveUpload(stores, {
+			partNumber: PART,
+			fileName: 'readings.csv',
+			body: bytesOf(TEXT),
+			by: ENGINEER
+		});
+		if (received.status !== 'received') throw new Error(received.message);
+		await runOpenJobs(stores, handlers);
+		const id = received.upload;
+		await mapUpload(stores, { upload: id, request: requestedMapping.parse({}), by: ENGINEER });
+		const found = await findUpload(stores.db, id);
+		const characteristic = findCharacteristic('V_F');
+		if (found === undefined || characteristic === undefined) throw new Error('not there');
+		const table = new ReadingTable();
+		const device = table.devices.indexOf({ lot: 'Z', wafer: '', site: '', element: '', name: 'D' });
+		table
+			.seriesOf(characteristic, { temperatureCelsius: 25, forwardCurrent: 7 }, UNITS.voltage[0])
+			?.add(device, 0.5, 0, 1);
+		const set = await openStagedSet(stores.db, { upload: found, by: ENGINEER });
+		await stageReadings(stores.db, {
+			set,
+			table,
+			job: { id: 0, attempt: 1, report: () => undefined, isCurrent: () => Promise.resolve(true) }
+		});
+		const keys = async () =>
+			(await stores.db.select().from(readingBlock)).map(({ conditionKey }) => conditionKey);
+		expect(await keys()).toEqual(['T=25;IF=7']);
+
+		await runOpenJobs(stores, handlers);
+		expect(await keys()).toEqual(['T=25;VR=60', 'T=25;VR=60', 'T=-40;IF=0.1', 'T=25;IF=2']);
+		const sets = await stores.db.select().from(measurementSet);
+		expect(sets.map(({ state }) => state)).toEqual(['accepted']);
+	});
+});
+
 describe('readings as values of devices', () => {
 	it('are in SI, averaged over repeats, with their flags, in the order of the devices', async () => {
 		const { id } = await acceptedSet(TEXT);
@@ -260,8 +301,20 @@ describe('a file of I–V sweeps', () => {
 			points: 4,
 			conditions: [{ quantity: 'current', conditionKey: 'T=25', frequency: null, biases: 2 }]
 		});
-		const [block] = await stores.db.select().from(sweepBlock);
-		expect([block?.quantity, block?.grid, block?.unitScale]).toEqual(['current', [5, -0.4], 1e-3]);
+		expect(await sweepConditions(stores.db, [id])).toEqual([]);
+		expect(await sweepConditions(stores.db, [id], 'current')).toEqual(['T=25']);
+		const matrices = [];
+		for await (const matrix of readSweeps(stores.db, [id], 'T=25', 'current'))
+			matrices.push(matrix);
+		expect(matrices).toEqual([
+			{
+				set: id,
+				firstRow: 0,
+				grid: [5, -0.4],
+				unitScale: 1e-3,
+				values: Float64Array.of(0.0002, -12.5, 0.00025, -12.75)
+			}
+		]);
 		expect(await exported(id)).toBe(
 			[
 				'lot,wafer,site,element,device,temperature_C,bias_V,current_mA',

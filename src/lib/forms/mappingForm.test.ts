@@ -95,3 +95,36 @@ describe('the mapping form', () => {
 		expect(requestOf({ ...recognised, [unit]: 'pF', skipLines: '12' }).skipLines).toBe(12);
 	});
 });
+
+describe('the mapping form of readings', () => {
+	const readings = previewUpload(
+		'lot,device,parameter,T [C],V_R [V],value,unit\nA,D1,I_R,25,,1.5,nA\nA,D1,I_R,25,,1.25,nA\n',
+		{ encoding: 'utf-8', lineCount: 3 }
+	);
+	if (readings.status !== 'read') throw new Error(readings.status);
+	const values = mappingValues(readings.preview, null);
+	const read = (said: Readonly<Record<string, string>>) =>
+		readMappingForm({ ...values, ...said }, readings.preview);
+	const valueUnit = columnField(5, 'unit');
+
+	it('leaves the unit to the lines when a column states it, and asks for it otherwise', () => {
+		const outcome = read({ biasSign: 'reversePositive' });
+		expect(outcome.status === 'read' && outcome.request.columns?.[5]).toEqual({
+			header: 'value',
+			meaning: 'value',
+			unit: null
+		});
+		expect(read({ biasSign: 'reversePositive', [columnField(6, 'meaning')]: 'ignore' })).toEqual({
+			status: 'wrong',
+			errors: { [valueUnit]: [measurementMessages.unitMissing('value')] }
+		});
+	});
+
+	it('asks for the sign of a reverse bias only where there is a bias', () => {
+		expect(read({})).toEqual({
+			status: 'wrong',
+			errors: { biasSign: [measurementMessages.biasSignMissing()] }
+		});
+		expect(read({ [columnField(4, 'meaning')]: 'ignore' }).status).toBe('read');
+	});
+});

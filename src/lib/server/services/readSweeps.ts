@@ -2,6 +2,7 @@ import { and, asc, eq, inArray } from 'drizzle-orm';
 import type { SetDevices } from '$lib/core/distributions/indexDevices';
 import type { SweepMatrix } from '$lib/core/distributions/conditionColumns';
 import { CHUNK, deviceColumns, unpackMatrix } from '$lib/core/measurements/blocks';
+import type { SweptQuantity } from '$lib/core/measurements/sweepTable';
 import type { Database } from '../db/database';
 import { deviceBlock, sweepBlock } from '../db/schema';
 
@@ -22,29 +23,34 @@ export async function readDevices(db: Database, sets: readonly number[]): Promis
 	return found;
 }
 
-/** The temperatures and frequencies at which these sets hold capacitance sweeps, as keys. */
-export async function sweepConditions(db: Database, sets: readonly number[]): Promise<string[]> {
+/** The temperatures and frequencies at which these sets hold sweeps of a quantity, as keys. */
+export async function sweepConditions(
+	db: Database,
+	sets: readonly number[],
+	quantity: SweptQuantity = 'capacitance'
+): Promise<string[]> {
 	if (sets.length === 0) return [];
 	const found = await db
 		.selectDistinct({ conditionKey: sweepBlock.conditionKey })
 		.from(sweepBlock)
-		.where(and(inArray(sweepBlock.set, [...sets]), eq(sweepBlock.quantity, 'capacitance')));
+		.where(and(inArray(sweepBlock.set, [...sets]), eq(sweepBlock.quantity, quantity)));
 	return found.map(({ conditionKey }) => conditionKey).sort();
 }
 
 /**
- * The capacitance matrices at one temperature and frequency, one after the other, so that only one
- * block is in memory at a time.
+ * The matrices of a quantity at one temperature and frequency, one after the other, so that only one
+ * block is in memory at a time. Currents have the sign of their bias, reverse positive.
  */
 export async function* readSweeps(
 	db: Database,
 	sets: readonly number[],
-	conditionKey: string
+	conditionKey: string,
+	quantity: SweptQuantity = 'capacitance'
 ): AsyncGenerator<SweepMatrix> {
 	for (const set of sets) {
 		const isAtCondition = and(
 			eq(sweepBlock.set, set),
-			eq(sweepBlock.quantity, 'capacitance'),
+			eq(sweepBlock.quantity, quantity),
 			eq(sweepBlock.conditionKey, conditionKey)
 		);
 		const keys = await db
