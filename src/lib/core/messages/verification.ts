@@ -44,3 +44,6 @@ export const secondRouteNote = () =>
 
 export const wholeCurveHasOneRoute = () =>
 	'a factor for the whole curve is simulated, and there is no second route to it';
+
+export const censoredHasOneRoute = (count: number) =>
+	`${count} ${count === 1 ? 'reading is' : 'readings are'} censored, and there is no second route to a censored likelihood`;

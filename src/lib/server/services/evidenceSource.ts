@@ -8,6 +8,7 @@ import {
 	type DeviceValue,
 	type PackedBlock
 } from '$lib/core/review/secondRoute/readColumn';
+import { readReadings } from '$lib/core/review/secondRoute/readReadings';
 import type { Database } from '../db/database';
 import {
 	deviceBlock,
@@ -15,6 +16,7 @@ import {
 	lot,
 	measurementSet,
 	policyVersion,
+	readingBlock,
 	suspect,
 	sweepBlock,
 	verdict
@@ -43,6 +45,8 @@ export interface MeasuredDevices {
 	readonly independentLots: number;
 	/** Largest stated uncertainty of the sets behind the values, relative. */
 	readonly uncertainty: number;
+	/** Devices of which the reading is only a bound. */
+	readonly censored: number;
 }
 
 export interface StoredLimit {
@@ -105,7 +109,53 @@ export class EvidenceSource {
 		return {
 			devices,
 			independentLots: new Set(devices.map(({ waferLot }) => waferLot)).size,
-			uncertainty: await this.#uncertainty(new Set(blocks.map(({ set }) => set)))
+			uncertainty: await this.#uncertainty(new Set(blocks.map(({ set }) => set))),
+			censored: 0
+		};
+	}
+
+	/** The single readings of a characteristic at a condition, left out as above. */
+	async readingsOf(characteristic: string, conditionKeyText: string): Promise<MeasuredDevices> {
+		const rows = await this.#db
+			.select({
+				set: readingBlock.set,
+				chunk: readingBlock.chunk,
+				unitScale: readingBlock.unitScale,
+				bytes: readingBlock.values,
+				flags: readingBlock.censored,
+				devices: deviceBlock.devices
+			})
+			.from(readingBlock)
+			.innerJoin(measurementSet, eq(readingBlock.set, measurementSet.id))
+			.innerJoin(
+				deviceBlock,
+				and(eq(deviceBlock.set, readingBlock.set), eq(deviceBlock.chunk, readingBlock.chunk))
+			)
+			.where(
+				and(
+					this.#accepted(),
+					eq(readingBlock.characteristic, characteristic),
+					eq(readingBlock.conditionKey, conditionKeyText)
+				)
+			);
+		const blocks = rows.map(({ chunk, devices, ...rest }) => ({
+			...rest,
+			firstRow: chunk * ROWS_PER_BLOCK,
+			devices: deviceNames.parse(devices)
+		}));
+		this.#leftOut ??= await this.#readLeftOut();
+		const leftOut = this.#leftOut;
+		const key = `${characteristic} ${conditionKeyText}`;
+		const { devices, censored } = readReadings(
+			blocks,
+			(set, row) => leftOut.has(`${set}/${row}/${key}`),
+			await this.#waferLots()
+		);
+		return {
+			devices,
+			independentLots: new Set(devices.map(({ waferLot }) => waferLot)).size,
+			uncertainty: await this.#uncertainty(new Set(blocks.map(({ set }) => set))),
+			censored
 		};
 	}
 

@@ -1,3 +1,4 @@
+import { findCharacteristic } from '$lib/core/characteristics/catalogue';
 import type { DocumentRow } from '$lib/core/datasheet/documentRows';
 import { memoMissing, memoUnreadable } from '$lib/core/messages/verification';
 import { computeEvidence } from '$lib/core/review/secondRoute/computeEvidence';
@@ -22,12 +23,18 @@ export async function gatherEvidence(
 	if (stored === 'missing') return { status: 'refused', reason: memoMissing() };
 	if (stored === 'unreadable') return { status: 'refused', reason: memoUnreadable() };
 
+	const { characteristic, conditionKey } = stored.row;
+	const of = findCharacteristic(characteristic);
 	const at = conditionOf(entry, stored.row.condition);
-	const measured = await source.devicesAt(at, at.reverseVoltage);
+	const measured =
+		of?.measuredAs === 'reading'
+			? await source.readingsOf(characteristic, conditionKey)
+			: await source.devicesAt(at, at.reverseVoltage);
 	return computeEvidence({
 		printed: entry.row,
 		memo: stored.row,
 		rules: stored.rules,
+		transform: of?.transform ?? 'ln',
 		...measured
 	});
 }

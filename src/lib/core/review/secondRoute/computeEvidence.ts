@@ -1,7 +1,12 @@
+import type { Transform } from '../../distributions/summary';
 import { BASES, type Basis } from '../../limits/basis';
 import type { LimitRow } from '../../limits/limit';
 import type { LimitPolicy } from '../../limits/policy';
-import { conditionNotMeasured, memoDiffers } from '../../messages/verification';
+import {
+	censoredHasOneRoute,
+	conditionNotMeasured,
+	memoDiffers
+} from '../../messages/verification';
 import type { ComputedEvidence, RouteCheck } from '../verificationEvidence';
 import { checkPrinted, type Side } from './checkPrinted';
 import { allowedOutside, countOutside, listOutside, lotRanges } from './devicesBeyond';
@@ -31,6 +36,9 @@ export interface EvidenceInput {
 	readonly independentLots: number;
 	/** Stated systematic uncertainty, relative. */
 	readonly uncertainty: number;
+	readonly transform: Transform;
+	/** Devices of which the reading is only a bound. */
+	readonly censored: number;
 }
 
 const SIDES = ['minimum', 'typical', 'maximum'] as const;
@@ -45,11 +53,13 @@ export function computeEvidence(input: EvidenceInput): ComputedEvidence {
 	const { printed, memo, rules, devices } = input;
 	const stray = strayText(printed, memo);
 	if (stray !== undefined) return { status: 'refused', reason: memoDiffers(stray) };
+	if (input.censored > 0) return { status: 'refused', reason: censoredHasOneRoute(input.censored) };
 	if (devices.length === 0) return { status: 'refused', reason: conditionNotMeasured() };
 
 	const again = recompute(devices, rules, {
 		isShared: memo.minimum !== null && memo.maximum !== null,
-		uncertainty: input.uncertainty
+		uncertainty: input.uncertainty,
+		transform: input.transform
 	});
 	if (again.status === 'refused') return again;
 

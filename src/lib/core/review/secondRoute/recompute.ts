@@ -1,4 +1,5 @@
 import { EXTREMES } from '../../distributions/extremes';
+import type { Transform } from '../../distributions/summary';
 import type { Allowance, Side } from '../../limits/allowance';
 import type { LimitPolicy } from '../../limits/policy';
 import { wholeCurveHasOneRoute } from '../../messages/verification';
@@ -28,6 +29,8 @@ export interface RecomputeOptions {
 	readonly isShared: boolean;
 	/** Stated systematic uncertainty, relative, outwards on both sides. */
 	readonly uncertainty: number;
+	/** How the values are taken before they are summed up; `ln`, unless said otherwise. */
+	readonly transform?: Transform;
 }
 
 /** What lies between the limits before allowances: minimum and maximum in SI. */
@@ -38,23 +41,24 @@ type Between = Pick<Recomputed, 'minimum' | 'maximum' | 'shareOutside'>;
  * logarithms for mean and spread, the factor by integrating the confidence, ranks by summing the
  * binomial distribution, the median by sorting.
  *
- * @param devices with values in SI, positive
+ * @param devices with values in SI, positive where a logarithm is taken
  */
 export function recompute(
 	devices: readonly DeviceValue[],
 	rules: LimitPolicy,
-	{ isShared, uncertainty }: RecomputeOptions
+	{ isShared, uncertainty, transform = 'ln' }: RecomputeOptions
 ): Recomputation {
 	if (devices.length < 2)
 		return { status: 'refused', reason: `only ${devices.length} measured devices` };
 	if (rules.span === 'whole-curve') return { status: 'refused', reason: wholeCurveHasOneRoute() };
-	const between = betweenOf(devices, rules, isShared);
+	const between = betweenOf(devices, rules, { isShared, transform });
 	if (typeof between === 'string') return { status: 'refused', reason: between };
 
 	const added = rules.uncertaintyTreatment === 'not-added' ? 0 : uncertainty;
 	const outwards = (value: number, side: Side) => {
 		const sign = side === 'minimum' ? -1 : 1;
-		return moved(value, sign, driftOn(rules, side)) * (1 + sign * added);
+		const drifted = moved(value, sign, driftOn(rules, side));
+		return drifted + sign * Math.abs(drifted) * added;
 	};
 	return {
 		status: 'done',
@@ -72,14 +76,16 @@ function driftOn({ drift }: LimitPolicy, side: Side): Allowance {
 }
 
 function moved(value: number, sign: number, by: Allowance): number {
-	return 'relative' in by ? value * (1 + sign * by.relative) : value + sign * by.absolute;
+	return 'relative' in by
+		? value + sign * Math.abs(value) * by.relative
+		: value + sign * by.absolute;
 }
 
 /** The raw limits, or why this route has none. */
 function betweenOf(
 	devices: readonly DeviceValue[],
 	rules: LimitPolicy,
-	isShared: boolean
+	{ isShared, transform }: { readonly isShared: boolean; readonly transform: Transform }
 ): Between | string {
 	const isTogether = isShared && rules.tails === 'both';
 	const assurance = {
@@ -90,6 +96,7 @@ function betweenOf(
 		case 'normal':
 			return pooled(
 				devices,
+				transform,
 				isTogether
 					? twoSidedFactor(devices.length, assurance)
 					: oneSidedFactor(devices.length, assurance)
@@ -97,9 +104,9 @@ function betweenOf(
 		case 'sigma':
 			return rules.k === undefined
 				? 'the policy states no multiple of the standard deviation'
-				: pooled(devices, rules.k);
+				: pooled(devices, transform, rules.k);
 		case 'lots':
-			return futureLots(devices, assurance, isTogether);
+			return futureLots(devices, transform, { assurance, isTogether });
 		case 'order':
 			return ordered(devices, assurance, isTogether);
 		default:
@@ -107,20 +114,22 @@ function betweenOf(
 	}
 }
 
-function pooled(devices: readonly DeviceValue[], factor: number): Between {
-	const { mean, spread } = momentsOf(devices);
-	return around(mean, factor * spread, factor);
+function pooled(devices: readonly DeviceValue[], transform: Transform, factor: number): Between {
+	const { mean, spread } = momentsOf(devices, transform);
+	return around(mean, factor * spread, { factor, transform });
 }
 
 function futureLots(
 	devices: readonly DeviceValue[],
-	assurance: Assurance,
-	isTogether: boolean
+	transform: Transform,
+	{ assurance, isTogether }: { readonly assurance: Assurance; readonly isTogether: boolean }
 ): Between | string {
-	const spread = lotSpread(devices.map((of) => ({ ...of, y: Math.log(of.value) })));
+	const { to } = WAYS[transform];
+	const spread = lotSpread(devices.map((of) => ({ ...of, y: to(of.value) })));
 	if (spread === undefined) return 'lots of several devices are needed';
 	const margin = isTogether ? lotsHalfWidth(spread, assurance) : lotsMargin(spread, assurance);
-	return around(spread.mean, margin, margin / momentsOf(devices).spread);
+	const factor = margin / momentsOf(devices, transform).spread;
+	return around(spread.mean, margin, { factor, transform });
 }
 
 function ordered(
@@ -139,19 +148,32 @@ function ordered(
 	};
 }
 
-function around(mean: number, margin: number, factor: number): Between {
+/** Into what is summed up, and back. */
+const WAYS = {
+	identity: { to: (value: number) => value, back: (y: number) => y },
+	ln: { to: (value: number) => Math.log(value), back: (y: number) => Math.exp(y) },
+	log10: { to: (value: number) => Math.log(value) / Math.LN10, back: (y: number) => 10 ** y }
+} as const satisfies Record<Transform, unknown>;
+
+function around(
+	mean: number,
+	margin: number,
+	{ factor, transform }: { readonly factor: number; readonly transform: Transform }
+): Between {
+	const { back } = WAYS[transform];
 	return {
-		minimum: Math.exp(mean - margin),
-		maximum: Math.exp(mean + margin),
+		minimum: back(mean - margin),
+		maximum: back(mean + margin),
 		shareOutside: normalProbability(-factor)
 	};
 }
 
-function momentsOf(devices: readonly DeviceValue[]): { mean: number; spread: number } {
-	const logs = devices.map(({ value }) => Math.log(value));
-	const mean = logs.reduce((sum, y) => sum + y, 0) / logs.length;
-	const squares = logs.reduce((sum, y) => sum + (y - mean) ** 2, 0);
-	return { mean, spread: Math.sqrt(squares / (logs.length - 1)) };
+function momentsOf(devices: readonly DeviceValue[], transform: Transform) {
+	const { to } = WAYS[transform];
+	const ys = devices.map(({ value }) => to(value));
+	const mean = ys.reduce((sum, y) => sum + y, 0) / ys.length;
+	const squares = ys.reduce((sum, y) => sum + (y - mean) ** 2, 0);
+	return { mean, spread: Math.sqrt(squares / (ys.length - 1)) };
 }
 
 function median(values: readonly number[]): number {
