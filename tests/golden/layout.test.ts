@@ -2,9 +2,12 @@ import { describe, expect, it } from 'vitest';
 import { drawCharts } from '../../src/lib/server/pdf/renderDatasheet';
 import { attachedFiles } from '../../src/lib/server/pdf/attachedFiles';
 import { layoutDatasheet } from '../../src/lib/server/pdf/layout/layoutDatasheet';
-import type { DatasheetDocument } from '../../src/lib/core/datasheet/document';
+import type { DatasheetDocument, DocumentSection } from '../../src/lib/core/datasheet/document';
 import type { PublicationRecord } from '../../src/lib/core/datasheet/record';
 import type { Box, TextBox } from '../../src/lib/server/pdf/layout/box';
+import { PACKAGES } from '../../src/lib/core/outline/packages';
+import { MEASURE, PAPERS } from '../../src/lib/server/pdf/layout/paper';
+import { completeSheet, listedRecord } from './completeSheet';
 import { printLayout } from './printLayout';
 import { draftRecord, manyRows, releaseRecord, tuningDiode } from './sampleDatasheets';
 
@@ -12,6 +15,9 @@ async function layout(document: DatasheetDocument, record: PublicationRecord) {
 	const charts = await drawCharts(document);
 	return layoutDatasheet(document, record, { charts, attached: attachedFiles(document) });
 }
+
+const LEFT = PAPERS.a4.left;
+const HALF = (84 * 72) / 25.4;
 
 const isText = (box: Box): box is TextBox => box.kind === 'text';
 const textOf = (box: TextBox) => box.pieces.map(({ text }) => text).join('');
@@ -29,6 +35,54 @@ describe('the layout as data', () => {
 		await expect(printLayout(await layout(document, draftRecord))).toMatchFileSnapshot(
 			'draft-letter.layout.txt'
 		);
+	});
+});
+
+describe('a sheet with every kind of section', () => {
+	it('stays as it was approved', async () => {
+		await expect(printLayout(await layout(completeSheet(), listedRecord))).toMatchFileSnapshot(
+			'complete-a4.layout.txt'
+		);
+	});
+
+	it.each(PACKAGES.map(({ name }) => name))(
+		'keeps %s within its half of the page',
+		async (name) => {
+			const { pages } = await layout(completeSheet({ packageName: name }), listedRecord);
+			const drawings = pages.flatMap(({ boxes }) =>
+				boxes.flatMap((box) => (box.kind === 'drawing' && box.width < HALF + 1 ? [box] : []))
+			);
+			// Terminals, three half charts, circuit, outline, land pattern.
+			expect(drawings).toHaveLength(7);
+			for (const { x, width } of drawings)
+				expect(x + width).toBeLessThanOrEqual(LEFT + MEASURE + 0.01);
+		}
+	);
+
+	it('numbers its figures in their order', async () => {
+		const { pages } = await layout(completeSheet(), listedRecord);
+		const figures = pages.flatMap(({ boxes }) =>
+			boxes
+				.filter(isText)
+				.flatMap((box) => /^Fig\.\u00a0(\d+)$/.exec(textOf(box).trim())?.[1] ?? [])
+		);
+		expect(figures).toEqual(['1', '2', '3', '4', '5', '6', '7']);
+	});
+
+	it('keeps heads with what they head, and everything above the foot', async () => {
+		for (const paper of ['a4', 'letter'] as const) {
+			const { pages, paper: sheet } = await layout(completeSheet({ paper }), listedRecord);
+			for (const { boxes } of pages) {
+				const body = boxes.filter(isText).filter(({ y }) => y < sheet.footRule);
+				const drawn = boxes.flatMap((box) => (box.kind === 'drawing' ? [box.y + box.height] : []));
+				const lowest = Math.max(...body.map(({ y }) => y), ...drawn);
+				expect(lowest).toBeLessThanOrEqual(sheet.bottom);
+				const heads = body.filter(
+					(box) => box.pieces[0]?.face === 'slabMedium' && box.pieces[0].size === 11.5
+				);
+				for (const head of heads) expect(head.y).toBeLessThan(lowest - 20);
+			}
+		}
 	});
 });
 
@@ -129,13 +183,45 @@ describe('what is long or empty', () => {
 		}
 	});
 
+	it.each([
+		['paragraph', 'headline'],
+		['list', 'features']
+	] as const)('carries a %s longer than a page on over pages, line by line', async (_, block) => {
+		const words = Array.from({ length: 1800 }, (_, at) => `word${at}`);
+		const full = tuningDiode();
+		const long: DatasheetDocument = {
+			...full,
+			sections: full.sections.map((section) =>
+				section.kind === 'prose' && section.block === block
+					? {
+							...section,
+							paragraphs: Array.from({ length: 18 }, (_, at) => [
+								{ kind: 'text' as const, text: words.slice(at * 100, at * 100 + 100).join(' ') }
+							])
+						}
+					: section
+			)
+		};
+		const { pages, paper } = await layout(long, releaseRecord);
+		const printed = pages
+			.flatMap(({ boxes }) => boxes.filter(isText).filter(({ y }) => y < paper.footRule))
+			.map(textOf)
+			.join(' ')
+			.match(/word\d+/g);
+		expect(printed).toEqual(words);
+		for (const { boxes } of pages) {
+			const lowest = boxes.filter(isText).filter(({ y }) => y < paper.footRule);
+			expect(Math.max(...lowest.map(({ y }) => y))).toBeLessThanOrEqual(paper.bottom);
+		}
+	});
+
 	it('leaves out sections with nothing in them', async () => {
 		const full = tuningDiode();
 		const document: DatasheetDocument = {
 			...full,
 			basisNotes: [],
 			footnotes: [],
-			sections: full.sections.map((section) => {
+			sections: full.sections.map((section): DocumentSection => {
 				if (section.kind === 'prose') return { ...section, paragraphs: [] };
 				if (section.kind === 'headline-figures') return { ...section, figures: [] };
 				if (section.kind === 'capacitance-chart') return { ...section, points: [] };

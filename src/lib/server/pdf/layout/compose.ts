@@ -1,6 +1,7 @@
 import { asArtifacts, moveBoxes, type Box, type RuleBox } from './box';
 import { stackHeight, TERMS, type Block, type Part, type Row, type Section } from './flow';
 import { mm } from './paper';
+import { sliceBlock } from './sliceBlock';
 import { RULES } from './styles';
 
 export interface PageLimits {
@@ -43,6 +44,7 @@ export function compose(sections: readonly Section[], limits: PageLimits): Compo
 	const bookmarks: ({ title: string } & PagePlace)[] = [];
 	const anchors = new Map<string, PagePlace>();
 
+	const pageHeight = limits.bottom - limits.top;
 	const page = () => pages[pages.length - 1] ?? { boxes: [], end: 0 };
 	const bottom = () => (pages.length === 1 ? limits.firstBottom : limits.bottom);
 	const isFresh = () => pages.length > 1 && page().boxes.length === 0;
@@ -57,11 +59,30 @@ export function compose(sections: readonly Section[], limits: PageLimits): Compo
 		page().end += block.height;
 	};
 
+	/** A block stays whole where a page can hold it; one that none can goes on over pages. */
+	const placeBlock = (block: Block) => {
+		let rest = block;
+		while (rest.height > pageHeight) {
+			const room = bottom() - page().end;
+			if (room < pageHeight * LEAST_SHARE && !isFresh()) {
+				turn();
+				continue;
+			}
+			const sliced = sliceBlock(rest, room);
+			if (sliced.rest === null) break;
+			place(sliced.first);
+			turn();
+			rest = sliced.rest;
+		}
+		if (!fits(rest.height) && !isFresh()) turn();
+		place(rest);
+	};
+
 	const placeTable = (table: Table, section: Section) => {
 		place(table.head);
 		let isFirstOnPage = true;
 		table.rows.forEach((row, at) => {
-			if (!isFirstOnPage && !fits(heldTogether(table, at, limits.bottom - limits.top))) {
+			if (!isFirstOnPage && !fits(heldTogether(table, at, pageHeight))) {
 				closeTable(table, false);
 				turn();
 				for (const block of [section.continued, table.head])
@@ -92,8 +113,8 @@ export function compose(sections: readonly Section[], limits: PageLimits): Compo
 	for (const section of sections) {
 		const gap = isFresh() ? 0 : gapBefore(section, pages.length === 1);
 		const whole = sectionHeight(section);
-		const isBreakable = whole > limits.bottom - limits.top;
-		if (!isFresh() && !fits(gap + (isBreakable ? startHeight(section) : whole))) turn();
+		const isBreakable = whole > pageHeight;
+		if (!isFresh() && !fits(gap + (isBreakable ? startHeight(section, pageHeight) : whole))) turn();
 		else page().end += gap;
 
 		if (section.title !== null) bookmarks.push({ title: section.title, ...here() });
@@ -101,14 +122,14 @@ export function compose(sections: readonly Section[], limits: PageLimits): Compo
 		if (section.head) place(section.head);
 		for (const part of section.parts) {
 			if (part.kind === 'table') placeTable(part, section);
-			else {
-				if (!fits(part.block.height) && !isFresh()) turn();
-				place(part.block);
-			}
+			else placeBlock(part.block);
 		}
 	}
 	return { pages, bookmarks, anchors };
 }
+
+/** A block longer than a page begins on a page that has at least this share of it free. */
+const LEAST_SHARE = 0.25;
 
 /** Usual space between sections, on the first page and on the others. */
 const SECTION_GAP = { first: mm(6.4), other: mm(5.2) };
@@ -130,11 +151,12 @@ const sectionHeight = (section: Section) =>
 	(section.head?.height ?? 0) + section.parts.reduce((sum, part) => sum + partHeight(part), 0);
 
 /** What must fit for a section to begin on a page: its head, and its table's head with two rows. */
-function startHeight(section: Section): number {
+function startHeight(section: Section, pageHeight: number): number {
 	const [first] = section.parts;
 	const head = section.head?.height ?? 0;
 	if (!first) return head;
-	if (first.kind === 'block') return head + first.block.height;
+	if (first.kind === 'block')
+		return head + (first.block.height > pageHeight ? pageHeight * LEAST_SHARE : first.block.height);
 	return head + first.head.height + stackHeight(first.rows.slice(0, 3)) + (first.key?.height ?? 0);
 }
 
