@@ -110,6 +110,7 @@ export const ACCESS: Readonly<Record<string, Access>> = {
 	'/api/v1/products/[partNumber]/capacitance-table GET': 'limit.read',
 	'/api/v1/products/[partNumber]/distributions GET': 'measurement.read',
 	'/api/v1/products/[partNumber]/distributions POST': 'measurement.upload',
+	'/api/v1/products/[partNumber]/limits/what-if POST': 'limit.read',
 	'/api/v1/products/[partNumber]/measurement-sets GET': 'measurement.read',
 	'/api/v1/products/[partNumber]/measurement-sets POST': 'measurement.upload',
 	'/api/v1/releases GET': 'library',

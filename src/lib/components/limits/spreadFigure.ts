@@ -24,11 +24,17 @@ export interface ValueScale {
 export function valueScale(
 	spread: Spread,
 	limits: LimitNumbers,
-	{ left, right }: { readonly left: number; readonly right: number }
+	{
+		left,
+		right,
+		further
+	}: { readonly left: number; readonly right: number; readonly further?: LimitNumbers }
 ): ValueScale {
 	const values = [
 		...spread.lots.flatMap(({ lowest, highest }) => [lowest, highest]),
-		...[limits.minimum, limits.typical, limits.maximum].filter((value) => value !== null)
+		...[limits, further ?? limits]
+			.flatMap(({ minimum, typical, maximum }) => [minimum, typical, maximum])
+			.filter((value) => value !== null)
 	];
 	const [least, most] = [Math.min(...values), Math.max(...values)];
 	const air = most > least ? (most - least) * 0.06 : Math.abs(most) * 0.01;
@@ -82,4 +88,9 @@ export function limitMarks(
 		...(typical === null ? [] : [{ kind: 'typ' as const, x: typical, labelX: typical }]),
 		...mark('max', limits.maximum, 1)
 	];
+}
+
+/** Printed digits as a number for a figure. */
+export function readLimit(text: string | null): number | null {
+	return text === null ? null : Number(text.replace('\u2212', '-'));
 }

@@ -34,6 +34,8 @@ export interface CapacitanceTableRequest {
 	readonly declaredBasis?: Basis | undefined;
 	/** Which limits are promised at once; both, unless said otherwise. */
 	readonly sides?: readonly Side[] | undefined;
+	/** Whether what is computed is kept, and what has to be simulated is asked for; yes, unless said otherwise. */
+	readonly isKept?: boolean | undefined;
 }
 
 type RequestParameter = 'product' | 'policyVersion' | 'temperatureCelsius' | 'frequency';
@@ -46,6 +48,8 @@ export type CapacitanceTable =
 			readonly temperatureCelsius: number;
 			readonly frequency: number | undefined;
 			readonly rows: LimitRow[];
+			/** What the rows rest on, every bias of the table. */
+			readonly distributions: readonly StoredDistribution[];
 	  }
 	| {
 			readonly status: 'refused';
@@ -112,27 +116,39 @@ export async function capacitanceTable(
 		unit,
 		biases,
 		frequency,
-		widening: await wideningOf(db, policy, {
-			...scope,
-			conditionKey: conditionKey({
-				temperatureCelsius,
-				...(frequency === undefined ? {} : { frequency })
-			}),
-			sides: request.sides ?? ['minimum', 'maximum']
-		})
+		widening: await wideningOf(
+			db,
+			policy,
+			{
+				...scope,
+				conditionKey: conditionKey({
+					temperatureCelsius,
+					...(frequency === undefined ? {} : { frequency })
+				}),
+				sides: request.sides ?? ['minimum', 'maximum']
+			},
+			request.isKept
+		)
 	});
-	return { ...unit, temperatureCelsius, frequency, rows: checkTable(rows) };
+	return {
+		...unit,
+		temperatureCelsius,
+		frequency,
+		rows: checkTable(rows),
+		distributions: atFrequency
+	};
 }
 
 /** The whole-curve factor where the policy asks for one; what isn't simulated yet is asked for. */
 async function wideningOf(
 	db: Connection,
 	policy: StoredPolicy,
-	curve: CurveOf
+	curve: CurveOf,
+	isKept = true
 ): Promise<CurveWidening | undefined> {
 	if (policy.rules.span === 'each-bias' || policy.rules.method !== 'lots') return undefined;
 	const found = await storedWidening(db, curve, policy.rules);
-	if (found === undefined) await enqueueWidening(db, curve, policy.id);
+	if (found === undefined && isKept) await enqueueWidening(db, curve, policy.id);
 	return found;
 }
 
@@ -191,7 +207,7 @@ async function limitRows(db: Connection, wanted: RowsWanted): Promise<LimitRow[]
 				widening: wanted.widening
 			})
 		);
-	await rememberRows(db, fresh);
+	if (request.isKept !== false) await rememberRows(db, fresh);
 	for (const row of fresh) known.set(row.inputHash, row);
 
 	return wanted.biases.map((bias) => {

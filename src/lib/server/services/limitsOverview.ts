@@ -1,6 +1,7 @@
 import type { Basis } from '$lib/core/limits/basis';
 import type { LimitRow } from '$lib/core/limits/limit';
 import type { Connection } from '../db/database';
+import type { StoredDistribution } from '../db/findDistributions';
 import { findMeasuredConditions } from '../db/findMeasuredConditions';
 import { capacitanceTable } from './capacitanceTable';
 import { CAPACITANCE } from './readBasis';
@@ -12,6 +13,7 @@ export interface LimitGroup {
 	readonly unit: string;
 	readonly unitScale: number;
 	readonly rows: readonly LimitRow[];
+	readonly distributions: readonly StoredDistribution[];
 }
 
 /** Every limit of a product by one policy, temperature by temperature. */
