@@ -3,12 +3,11 @@ import { worklistMessages as say } from '$lib/core/messages/worklist';
 import type { LimitRow } from '$lib/core/limits/limit';
 import { listAssessments } from '$lib/server/db/listAssessments';
 import { job } from '$lib/server/db/schema';
-import { assessReleases } from '$lib/server/services/assessReleases';
 import { computeDistributions } from '$lib/server/services/computeDistributions';
 import { gatherWorklist } from '$lib/server/services/gatherWorklist';
 import { publishRelease } from '$lib/server/services/publishRelease';
 import { fitSweepsJob } from '$lib/server/services/fitSweepsJob';
-import { publishReleaseJob } from '$lib/server/services/publishReleaseJob';
+import { handlers } from '$lib/server/work/handlers';
 import { runOpenJobs } from '$lib/server/work/runOpenJobs';
 import { insertAcceptedSet } from '../factories/acceptedSet';
 import {

@@ -158,14 +158,21 @@ describe('the table of a product', () => {
 		expect(again).toEqual(await tableOf());
 	});
 
-	it('answers a bias that was not measured with the reason', async () => {
-		const { rows } = await tableOf({ biases: [4, 5, 40] });
+	it('interpolates between measured biases and says so, and refuses one outside', async () => {
+		const { rows } = await tableOf({ biases: [4, 5, 10, 40] });
 		expect(rows.map((row) => row.refusals)).toEqual([
 			[],
-			[limitMessages.biasNotMeasured(5, BIASES)],
+			[],
+			[],
 			[limitMessages.biasNotMeasured(40, BIASES)]
 		]);
-		expect([rows[1]?.minimum, rows[1]?.typical, rows[1]?.maximum]).toEqual([null, null, null]);
+		const [at4 = 0, at5 = 0, at10 = 0] = rows.map(({ typical }) => typical?.raw);
+		// The devices follow 40 pF·(1 + V/2)^−1.1 closely: 10.08 pF at 5 V.
+		expect(at5 * 1e12).toBeCloseTo(40 * 3.5 ** -1.1, 1);
+		expect(at4).toBeGreaterThan(at5);
+		expect(at5).toBeGreaterThan(at10);
+		expect(rows[1]?.minimum?.derivation[0]?.method).toContain('interpolated within each sweep');
+		expect([rows[3]?.minimum, rows[3]?.typical, rows[3]?.maximum]).toEqual([null, null, null]);
 	});
 
 	it('refuses mean ± 4σ as a guarantee, and prints it behind a test', async () => {

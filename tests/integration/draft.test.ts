@@ -27,6 +27,7 @@ import { drawProof } from '$lib/server/services/drawProof';
 import { ensureTemplates } from '$lib/server/services/ensureTemplates';
 import { keepBound } from '$lib/server/services/keepBound';
 import { openDraft } from '$lib/server/services/openDraft';
+import { fitSweepsJob } from '$lib/server/services/fitSweepsJob';
 import { renderProof } from '$lib/server/services/renderProof';
 import { resolveDraft } from '$lib/server/services/resolveDraft';
 import { setRating } from '$lib/server/services/setRating';
@@ -175,9 +176,10 @@ describe('binding everything that matches', () => {
 		if (outcome.status !== 'bound') throw new Error(outcome.message);
 		expect(outcome.bound).toEqual([
 			'C_tot at V_R = 1\u00a0V, f = 1\u00a0MHz, T_j = 25\u00a0°C',
-			'C_tot at V_R = 1\u00a0V, T_j = 25\u00a0°C',
-			'C_tot at V_R = 4\u00a0V, T_j = 25\u00a0°C',
-			'C_tot at V_R = 15\u00a0V, T_j = 25\u00a0°C'
+			// 1, 4 and 15 V were measured; the others lie between and are interpolated.
+			...[1, 2, 3, 4, 6, 8, 10, 12, 15].map(
+				(bias) => `C_tot at V_R = ${bias}\u00a0V, T_j = 25\u00a0°C`
+			)
 		]);
 		const why = new Map(outcome.left.map((left) => [left.label, left.why]));
 		expect(why.get('V_R')).toBe(draftMessages.ratingIsTyped());
@@ -276,7 +278,7 @@ describe('newer data', () => {
 	});
 
 	it('make what they move stale, and what was bound stays printed', async () => {
-		const [, before] = await openedRows();
+		const before = (await openedRows()).get('4');
 		const slot = await slotAt(place);
 		expect(slot).toMatchObject({ state: 'stale', prints: { minimum: before } });
 		expect(slot.current?.minimum).not.toBe(before);
@@ -323,13 +325,17 @@ describe('newer data', () => {
 		expect((await slotAt(place)).state).toBe('bound');
 	});
 
-	/** What was bound before the data moved: the binding's own texts. */
-	async function openedRows(): Promise<(string | null)[]> {
+	/** What was bound before the data moved, by bias: the binding's own texts. */
+	async function openedRows(): Promise<Map<string, string | null>> {
 		const draft = await findDraft(bench.stores.db, bench.product.id);
 		const table = draft?.bindings.get('capacitance.25c');
-		return table?.kind === 'table'
-			? table.rows.map(({ binding }) => (binding.kind === 'limit' ? binding.printed.minimum : null))
-			: [];
+		const rows = table?.kind === 'table' ? table.rows : [];
+		return new Map(
+			rows.map(({ bias, binding }) => [
+				String(bias),
+				binding.kind === 'limit' ? binding.printed.minimum : null
+			])
+		);
 	}
 });
 
@@ -492,7 +498,8 @@ describe('submitting', () => {
 
 describe('the proof as a PDF', () => {
 	const draw = () => drawProof(bench.stores, { ...me, waitMilliseconds: 0 });
-	const work = () => runOpenJobs(bench.stores, { 'render-proof': renderProof });
+	const work = () =>
+		runOpenJobs(bench.stores, { 'render-proof': renderProof, 'fit-sweeps': fitSweepsJob });
 
 	it('is drawn once for a content, and anew when the draft changes', async () => {
 		await open();

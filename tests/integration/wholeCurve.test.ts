@@ -7,9 +7,9 @@ import { policyVersion } from '$lib/server/db/schema';
 import { write } from '$lib/server/db/write';
 import { capacitanceTable } from '$lib/server/services/capacitanceTable';
 import { computeDistributions } from '$lib/server/services/computeDistributions';
-import { simulateWideningJob } from '$lib/server/services/curveWidening';
 import { DEFAULT_POLICIES } from '$lib/server/services/ensurePolicies';
 import { sha256 } from '$lib/server/services/sha256';
+import { handlers } from '$lib/server/work/handlers';
 import { runOpenJobs } from '$lib/server/work/runOpenJobs';
 import { insertAcceptedSet, insertProduct } from '../factories/acceptedSet';
 import { openTestDatabase } from '../factories/testDatabase';
@@ -83,7 +83,7 @@ it('waits for its simulation, and then widens every limit by the same factor', a
 	const waiting = await rowsBy(policies.whole);
 	expect(waiting[0]?.refusals).toEqual([limitMessages.wholeCurveNotSimulated()]);
 
-	await runOpenJobs(stores(), { 'simulate-widening': simulateWideningJob });
+	await runOpenJobs(stores(), handlers);
 	const [whole, each] = [await rowsBy(policies.whole), await rowsBy(policies.each)];
 	expect(whole.map(({ refusals }) => refusals)).toEqual(BIASES.map(() => []));
 	const ratios = whole.map(

@@ -11,7 +11,7 @@ export function sampleSteps(distribution: Distribution, condition: Condition): D
 	return [
 		{
 			name: 'Measurement sets',
-			method: `${listed(sets.length === 1 ? 'Set' : 'Sets', sets)}, at ${conditionText(condition, distribution.interpolated)}. ${uncertaintyText(distribution.uncertainty)}`,
+			method: `${listed(sets.length === 1 ? 'Set' : 'Sets', sets)}, at ${conditionText(condition, distribution)}. ${uncertaintyText(distribution.uncertainty)}`,
 			value: measured,
 			unit: 'sweeps',
 			text: String(measured)
@@ -48,9 +48,12 @@ function uncertaintyText(uncertainty: number | null): string {
 
 function conditionText(
 	{ temperatureCelsius, frequency, reverseVoltage }: Condition,
-	isInterpolated: boolean
+	{ interpolated, junctionPotential }: Distribution
 ): string {
-	const bias = isInterpolated ? 'interpolated within each sweep to' : 'the measured';
+	const along = junctionPotential === undefined ? 'V_R' : `V_R + ${junctionPotential}\u00a0V`;
+	const bias = interpolated
+		? `values interpolated within each sweep (against ln(${along})) to`
+		: 'the measured';
 	return [
 		...(reverseVoltage === undefined ? [] : [`${bias} ${signed(reverseVoltage)}\u00a0V`]),
 		`${signed(temperatureCelsius)}\u00a0°C`,

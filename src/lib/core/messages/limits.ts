@@ -48,8 +48,10 @@ export const limitMessages = {
 		const highest = Math.max(...measured);
 		return bias < lowest || bias > highest
 			? `${bias} V lies outside of the measured range, ${lowest} V to ${highest} V.`
-			: `${bias} V was not measured; a limit needs measured devices at its own bias.`;
+			: `${bias} V was not measured, and no sweep reaches across it.`;
 	},
+	biasUnderway: (bias: number) =>
+		`${bias} V was not measured itself; its values are being interpolated within each sweep.`,
 	temperatureNotMeasured: (temperature: number, measured: readonly number[]) =>
 		measured.length === 0
 			? 'No capacitance of this product is measured yet.'

@@ -18,6 +18,7 @@ import { findMeasuredConditions } from '../db/findMeasuredConditions';
 import { findPolicyVersion, type StoredPolicy } from '../db/findPolicies';
 import { product } from '../db/schema';
 import { enqueueWidening, storedWidening, type CurveOf } from './curveWidening';
+import { interpolateNow } from './interpolateNow';
 import { rememberedRows, rememberRows } from './limitMemo';
 import { CAPACITANCE } from './readBasis';
 import { sha256 } from './sha256';
@@ -81,11 +82,7 @@ export async function capacitanceTable(
 		characteristic: CAPACITANCE.characteristic
 	};
 	const { temperatureCelsius } = request;
-	const stored = await findDistributions(db, {
-		...scope,
-		temperatureCelsius,
-		interpolated: request.biases ?? []
-	});
+	const stored = await findDistributions(db, { ...scope, temperatureCelsius });
 	if (stored.length === 0) {
 		const measured = await findMeasuredConditions(db, scope);
 		const temperatures = [...new Set(measured.map((at) => at.temperatureCelsius))];
@@ -100,7 +97,8 @@ export async function capacitanceTable(
 	if (request.frequency === undefined && frequencies.length > 1) {
 		return refuse('frequency', limitMessages.severalFrequencies(stated));
 	}
-	const atFrequency = stored.filter(({ condition }) => condition.frequency === frequency);
+	const isAtFrequency = ({ condition }: StoredDistribution) => condition.frequency === frequency;
+	const atFrequency = stored.filter(isAtFrequency);
 	if (atFrequency.length === 0) {
 		return refuse('frequency', limitMessages.frequencyNotMeasured(frequency ?? 0, stated));
 	}
@@ -108,11 +106,16 @@ export async function capacitanceTable(
 	const unit = capacitanceUnit(atFrequency.map(({ distribution }) => medianOf(distribution)));
 	const biases =
 		request.biases ?? atFrequency.flatMap(({ condition }) => condition.reverseVoltage ?? []);
+	const at = { temperatureCelsius, ...(frequency === undefined ? {} : { frequency }) };
+	const between = await interpolateNow(db, { ...scope, at, biases });
 	const rows = await limitRows(db, {
 		request,
 		owner: { ...owner, basisHash: owner.basisHash },
 		policy,
-		stored: atFrequency,
+		stored: (
+			await findDistributions(db, { ...scope, temperatureCelsius, interpolated: biases })
+		).filter(isAtFrequency),
+		isUnderway: between.status === 'underway',
 		unit,
 		biases,
 		frequency,
@@ -161,6 +164,8 @@ interface RowsWanted {
 	readonly owner: { readonly partNumber: string; readonly basisHash: string };
 	readonly policy: StoredPolicy;
 	readonly stored: readonly StoredDistribution[];
+	/** Whether biases between measured ones wait for their distributions. */
+	readonly isUnderway: boolean;
 	readonly unit: TableUnit;
 	readonly biases: readonly number[];
 	readonly frequency: number | undefined;
@@ -232,9 +237,18 @@ function notMeasured(bias: number, wanted: RowsWanted): LimitRow {
 				'\n'
 			)
 		),
-		refusal: limitMessages.biasNotMeasured(
-			bias,
-			stored.flatMap(({ condition: at }) => at.reverseVoltage ?? [])
-		)
+		refusal: absenceOf(bias, stored, wanted.isUnderway)
 	});
+}
+
+function absenceOf(
+	bias: number,
+	stored: readonly StoredDistribution[],
+	isUnderway: boolean
+): string {
+	const measured = stored.flatMap(({ condition }) => condition.reverseVoltage ?? []);
+	const isBetween = bias > Math.min(...measured) && bias < Math.max(...measured);
+	return isBetween && isUnderway
+		? limitMessages.biasUnderway(bias)
+		: limitMessages.biasNotMeasured(bias, measured);
 }
