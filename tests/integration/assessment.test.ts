@@ -6,7 +6,6 @@ import { job } from '$lib/server/db/schema';
 import { computeDistributions } from '$lib/server/services/computeDistributions';
 import { gatherWorklist } from '$lib/server/services/gatherWorklist';
 import { publishRelease } from '$lib/server/services/publishRelease';
-import { fitSweepsJob } from '$lib/server/services/fitSweepsJob';
 import { handlers } from '$lib/server/work/handlers';
 import { runOpenJobs } from '$lib/server/work/runOpenJobs';
 import { insertAcceptedSet } from '../factories/acceptedSet';
@@ -20,11 +19,6 @@ import {
 } from '../factories/reviewBench';
 import { PEOPLE } from '../factories/reviewPeople';
 
-const handlers = {
-	'publish-release': publishReleaseJob,
-	'assess-releases': assessReleases,
-	'fit-sweeps': fitSweepsJob
-};
 const NOW = new Date().toISOString();
 
 let bench: ReviewBench;
