@@ -1,6 +1,7 @@
 import { BASIS_WORDS } from '$lib/core/limits/basis';
-import type { LimitValue } from '$lib/core/limits/limit';
+import type { LimitValue, TestYield } from '$lib/core/limits/limit';
 import { SHORT, signedText, type GridRow, type Shown } from './gridRow';
+import type { WithoutLotText } from './limitFacts';
 import type { LimitNumbers, Spread } from './spreadFigure';
 
 /** What the sheet of one printed number shows. */
@@ -17,6 +18,11 @@ export interface Derivation {
 	readonly limits: LimitNumbers;
 	/** `null` where nothing was measured. */
 	readonly spread: Spread | null;
+	/** What the devices say about the limits; empty where there are none. */
+	readonly facts: readonly { readonly term: string; readonly text: string }[];
+	/** The limits without each lot in turn; empty with fewer than two lots. */
+	readonly withoutLots: readonly WithoutLotText[];
+	readonly testYield: TestYield | null;
 }
 
 /** The sheet as plain text, one step a line, for a mail or a report. */
@@ -30,8 +36,10 @@ export function derivationText(of: Derivation): string {
 		head,
 		...(steps ?? []),
 		...(of.value === null ? [] : [`Printed ${of.shown}: ${of.value.text} ${of.unit}`]),
+		...(of.value?.test === undefined ? [] : [`Test limit: ${of.value.test.text} ${of.unit}`]),
 		...of.row.refusals,
 		...of.row.warnings,
+		...of.facts.map(({ term, text }) => `${term}: ${text}`),
 		`Basis: ${BASIS_WORDS[of.row.basis]}. Policy: ${of.policyText}`,
 		`Trace ${of.trace}, engine ${of.engineVersion}`
 	].join('\n');

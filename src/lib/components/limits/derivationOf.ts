@@ -1,5 +1,6 @@
 import { frequencyText, gridRow, SHOWN, signedText, type Shown } from './gridRow';
 import type { Derivation } from './derivation';
+import { limitFacts, withoutLotTexts } from './limitFacts';
 import type { Spread } from './spreadFigure';
 import { histogram } from '$lib/core/distributions/histogram';
 import type { Distribution } from '$lib/core/distributions/summary';
@@ -41,7 +42,13 @@ export function derivationOf(
 			typical: number(row.typical),
 			maximum: number(row.maximum)
 		},
-		spread: distribution === undefined ? null : spreadIn(distribution, row.unitScale)
+		spread: distribution === undefined ? null : spreadIn(distribution, row.unitScale),
+		facts: distribution === undefined ? [] : limitFacts(row, policy.rules, distribution),
+		withoutLots:
+			distribution === undefined || shown === 'typical'
+				? []
+				: withoutLotTexts(row, shown, policy.rules, distribution),
+		testYield: row.testYield ?? null
 	};
 }
 

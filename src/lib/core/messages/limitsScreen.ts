@@ -33,5 +33,7 @@ export const limitsScreenMessages = {
 	needsDevices: (count: number) => `${plural(count, 'device')} a side would be needed.`,
 	withoutLots: (left: readonly string[], lots: number, devices: number) =>
 		`Without ${left.join(', ')} (${plural(lots, 'lot')} with ${plural(devices, 'device')} left).`,
+	circular: () =>
+		'Circular: the limit came from these same devices, so that the index says little of it.',
 	notAsked: () => 'The trial could not be computed just now; the stored limits stand unchanged.'
 };

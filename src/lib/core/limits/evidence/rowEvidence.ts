@@ -17,6 +17,7 @@ export interface DevicesOutside {
 }
 
 export interface RowEvidence {
+	/** `null` without a limit, and where only sums are stored. */
 	readonly minimum: DevicesOutside | null;
 	readonly maximum: DevicesOutside | null;
 	/** Ppk against the printed limits; `null` without a limit, without spread or with censored readings. */
@@ -30,8 +31,9 @@ export function rowEvidence(
 	rules: Pick<LimitPolicy, 'content' | 'confidence'>
 ): RowEvidence {
 	const { minimum, maximum, basis } = row;
+	const { lowest } = distribution.extremes;
 	const on = (side: Side, limit: LimitValue | null) =>
-		limit === null
+		limit === null || lowest.length === 0
 			? null
 			: devicesOutside(distribution, { side, printed: limit.printed, basis, limit, rules });
 	return {
