@@ -447,6 +447,31 @@ export const limitMemo = sqliteTable(
 	]
 );
 
+/** A printed limit that a person decided; append-only, and the newest of a condition, policy and basis stands. */
+export const limitOverride = sqliteTable(
+	'limit_override',
+	{
+		id: integer().primaryKey({ autoIncrement: true }),
+		product: integer()
+			.notNull()
+			.references(() => product.id),
+		characteristic: text().notNull(),
+		conditionKey: text().notNull(),
+		policyVersion: integer()
+			.notNull()
+			.references(() => policyVersion.id),
+		basis: text().notNull(),
+		/** `limitDecision` of core; null where an override was taken back. */
+		decision: text({ mode: 'json' }),
+		reason: text().notNull(),
+		by: text()
+			.notNull()
+			.references(() => person.id),
+		at: text().notNull()
+	},
+	(table) => [index('limit_override_of').on(table.product, table.characteristic)]
+);
+
 // 8 · The one editable draft of a product
 
 export const draft = sqliteTable('draft', {
