@@ -2,7 +2,7 @@ import { DEMO_PRODUCTS } from './products';
 import { currentFileLines } from './currentLines';
 import { ELECTRICAL_PRODUCTS } from './electricalProducts';
 import { readingFileLines } from './readingLines';
-import { lotLines } from './sweepLines';
+import { sweepFileLines } from './sweepLines';
 
 /** A file of the demo. */
 export interface DemoFile {
@@ -12,15 +12,21 @@ export interface DemoFile {
 	lines(): Generator<string>;
 }
 
-/** The C–V sweeps of the demo, a lot each, in the order in which they were measured. */
+/** As many lots of a product are measured one by one, the others in one go. */
+const LOTS_BY_THEMSELVES = 3;
+
+/** The C–V sweeps of the demo in the order in which they were measured. */
 export function demoFiles(): DemoFile[] {
-	return DEMO_PRODUCTS.flatMap((product) =>
-		product.lots.map((lot) => ({
-			partNumber: product.partNumber,
-			fileName: `${product.partNumber}_${lot}.csv`,
-			lines: () => lotLines(product, lot)
-		}))
-	);
+	return DEMO_PRODUCTS.flatMap((product) => {
+		const { partNumber, lots } = product;
+		const first = lots.slice(0, LOTS_BY_THEMSELVES);
+		const others = lots.slice(LOTS_BY_THEMSELVES);
+		return [...first.map((lot) => [lot]), others].map((of) => ({
+			partNumber,
+			fileName: `${partNumber}_${of.length === 1 ? of[0] : `${of[0]}_to_${of.at(-1)}`}.csv`,
+			lines: () => sweepFileLines(product, of)
+		}));
+	});
 }
 
 /** The single readings and I–V sweeps of the demo, all lots of a product in one file. */

@@ -59,11 +59,11 @@ describe('the readings of the demo', () => {
 		expect(reader.problems.total).toBe(0);
 		const found = summarize(reader);
 		expect(found.map(({ of, unit, devices }) => [of, unit, devices])).toEqual([
-			['I_R T=25;VR=28', 'nA', 300],
-			['I_R T=85;VR=28', 'nA', 300],
-			['V_(BR) T=25;IR=0.00001', 'V', 300],
-			['V_F T=25;IF=0.01', 'V', 300],
-			['r_s T=25;f=470000000;VR=3', 'Ω', 300]
+			['I_R T=25;VR=28', 'nA', 800],
+			['I_R T=85;VR=28', 'nA', 800],
+			['V_(BR) T=25;IR=0.00001', 'V', 800],
+			['V_F T=25;IF=0.01', 'V', 800],
+			['r_s T=25;f=470000000;VR=3', 'Ω', 800]
 		]);
 		const [cold, hot, breakdown, forward, series] = found;
 		expect(cold?.bounds).toBeGreaterThan(0);
@@ -83,12 +83,12 @@ describe('the readings of the demo', () => {
 		expect(reader.problems.total).toBe(0);
 		const found = summarize(reader);
 		expect(found.map(({ of, unit, devices }) => [of, unit, devices])).toEqual([
-			['I_R T=25;VR=60', 'µA', 300],
-			['I_R T=125;VR=60', 'mA', 300],
-			['R_th(j-mb) T=25', 'K/W', 36],
-			['V_(BR) T=25;IR=0.001', 'V', 300],
+			['I_R T=25;VR=60', 'µA', 800],
+			['I_R T=125;VR=60', 'mA', 800],
+			['R_th(j-mb) T=25', 'K/W', 96],
+			['V_(BR) T=25;IR=0.001', 'V', 800],
 			...[-40, 25, 125].flatMap((at) =>
-				[0.5, 1, 2].map((current) => [`V_F T=${at};IF=${current}`, 'mV', 300])
+				[0.5, 1, 2].map((current) => [`V_F T=${at};IF=${current}`, 'mV', 800])
 			)
 		]);
 		const medianOf = (of: string) => found.find((entry) => entry.of === of)?.median ?? Number.NaN;
@@ -119,7 +119,7 @@ describe('the I–V sweeps of the demo', () => {
 		reader.end();
 		expect(reader.problems.total).toBe(0);
 		const { table } = reader;
-		expect(table.deviceCount).toBe(60);
+		expect(table.deviceCount).toBe(160);
 		expect(table.conditions().map(({ key, biases }) => [key, biases.length])).toEqual([
 			['T=25', 17],
 			['T=125', 17]

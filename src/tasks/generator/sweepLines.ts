@@ -7,16 +7,16 @@ import { seatOf } from './seat';
 export const HEADER = 'lot,wafer,site,device,temperature [°C],frequency [Hz],V_R [V],C_tot [pF]';
 
 /**
- * The lines of one lot's file, header first, as a tester at probe writes them. A lot's numbers
+ * The lines of a file of some lots, header first, as a tester at probe writes them. A lot's numbers
  * depend on the product's seed and the lot's place only, so a lot can be withheld without changing
  * the others.
  */
-export function* lotLines(product: DemoProduct, lot: string): Generator<string> {
+export function* sweepFileLines(product: DemoProduct, lots: readonly string[]): Generator<string> {
 	yield HEADER;
-	yield* readingLines(product, lot);
+	for (const lot of lots) yield* readingLines(product, lot);
 }
 
-/** The same without a header, for files that hold several lots. */
+/** The lines of one lot, without a header. */
 export function* readingLines(product: DemoProduct, lot: string): Generator<string> {
 	const random = new Random(product.seed * 1009 + product.lots.indexOf(lot) * 7919);
 	const ofLot = spread(product.law, product.lotSpread, random);

@@ -33,7 +33,7 @@ export const DEMO_DRAFTS: readonly DemoDraft[] = [
 			headline:
 				'The LKT-1130 tunes a resonant circuit by its bias. Its total capacitance falls from typically {C_tot @ V_R=1 V : typ} at 1 V to {C_tot @ V_R=28 V : typ} at 28 V.',
 			features:
-				'Limits at fifteen biases, each with its basis\nCapacitance characterized over three wafer lots\nSurface-mount package with two leads',
+				'Limits at fifteen biases, each with its basis\nCapacitance characterized over eight wafer lots\nSurface-mount package with two leads',
 			applications:
 				'Tracking filters of VHF and UHF receivers\nVoltage-controlled oscillators\nPhase-locked-loop frequency synthesizers\nElectrically tuned small antennas'
 		},
