@@ -51,7 +51,9 @@ function drawn(data: CharacteristicChartData): Drawn {
 
 const linesOf = ({ layer }: Drawn) => layer.filter(({ mark }) => mark.type === 'line');
 const textsOf = ({ layer }: Drawn) =>
-	layer.flatMap(({ mark }) => (mark.type === 'text' ? [mark.text] : []));
+	layer.flatMap(({ mark, data }) =>
+		mark.type === 'text' ? (data?.values ?? []).map((row) => ('text' in row ? row.text : '')) : []
+	);
 
 describe('a chart of a characteristic', () => {
 	it('draws each curve through its points; a logarithmic axis has no place for zero', () => {

@@ -69,7 +69,16 @@ export function labelPieces(text: string, size: number): LabelPiece[] {
 	);
 }
 
-/** Text at a fixed place of a panel, its pieces side by side. */
+/** A place given by columns of the data, in the unit of the chart. */
+const placed = {
+	x: { field: 'x', type: 'quantitative', scale: null },
+	y: { field: 'y', type: 'quantitative', scale: null }
+} as const;
+
+/**
+ * Text at a fixed place of a panel, its pieces side by side: one layer with a row a piece, because
+ * each layer costs the chart library as much as a curve.
+ */
 export function labelLayers(
 	pieces: readonly LabelPiece[],
 	at: Place & { readonly align: 'left' | 'right' },
@@ -77,23 +86,31 @@ export function labelLayers(
 ): Layer[] {
 	const total = piecesWidth(pieces);
 	let x = at.align === 'left' ? at.x : at.x - total;
-	return pieces.map((piece) => {
+	const values = pieces.map((piece) => {
 		const left = x + textWidth(/^ */.exec(piece.text)?.[0] ?? '', piece.size);
 		x += pieceWidth(piece);
 		return {
-			data: ONE_ROW,
-			mark: {
-				type: 'text',
-				text: piece.text.trimStart(),
-				align: 'left',
-				baseline: 'alphabetic',
-				fontSize: piece.size,
-				fontStyle: piece.style === 'italic' ? 'italic' : 'normal',
-				color
-			},
-			encoding: fixed({ x: left, y: at.y + piece.drop })
+			x: left,
+			y: at.y + piece.drop,
+			text: piece.text.trimStart(),
+			size: piece.size,
+			style: piece.style === 'italic' ? 'italic' : 'normal'
 		};
 	});
+	return [
+		{
+			data: { values },
+			mark: {
+				type: 'text',
+				align: 'left',
+				baseline: 'alphabetic',
+				fontSize: { expr: 'datum.size' },
+				fontStyle: { expr: 'datum.style' },
+				color
+			},
+			encoding: { ...placed, text: { field: 'text', type: 'nominal' } }
+		}
+	];
 }
 
 /** A plate of paper behind a label, a little larger than its text, that keeps the grid out. */
