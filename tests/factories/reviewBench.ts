@@ -6,6 +6,8 @@ import type { LimitRow } from '$lib/core/limits/limit';
 import type { Stores } from '$lib/server/work/stores';
 import { listPolicies } from '$lib/server/db/findPolicies';
 import { listVerificationRows } from '$lib/server/db/listVerificationRows';
+import { job } from '$lib/server/db/schema';
+import { write } from '$lib/server/db/write';
 import { capacitanceTable } from '$lib/server/services/capacitanceTable';
 import { computeDistributions } from '$lib/server/services/computeDistributions';
 import { decideRevision } from '$lib/server/services/decideRevision';
@@ -83,6 +85,8 @@ export async function openReviewBench(): Promise<ReviewBench> {
 		{ product: id },
 		{ id: 1, attempt: 1, report: () => undefined, isCurrent: () => Promise.resolve(true) }
 	);
+	// What the distributions ask for next has no part in a review.
+	await write(opened.db, (tx) => tx.delete(job));
 	return {
 		stores,
 		folder,
