@@ -44,7 +44,7 @@ export function figureSection(
 			{ block: head, gap: 0 },
 			{ block: figure, gap: 0 }
 		]);
-		return { height, boxes: moveBoxes(boxes, x, 0) as readonly Box[] };
+		return { height, boxes: moveBoxes(boxes, x, 0) };
 	});
 	return {
 		title: sections.map(({ heading }) => heading).join(', '),
