@@ -5,6 +5,7 @@ import type { Spread } from './spreadFigure';
 import { histogram } from '$lib/core/distributions/histogram';
 import type { Distribution } from '$lib/core/distributions/summary';
 import { describePolicy } from '$lib/core/limits/describePolicy';
+import type { DecidedLimit } from '$lib/core/limits/decision/limitDecision';
 import type { LimitRow, LimitValue } from '$lib/core/limits/limit';
 import type { PolicyVersion } from '$lib/core/limits/policy';
 import { spreadByLot } from '$lib/core/limits/spreadByLot';
@@ -21,7 +22,8 @@ export function derivationOf(
 	row: LimitRow,
 	shown: Shown,
 	policy: PolicyVersion,
-	distribution: Distribution | undefined
+	distribution: Distribution | undefined,
+	decided?: DecidedLimit
 ): Derivation {
 	const { temperatureCelsius, frequency } = row.condition;
 	const number = (value: LimitValue | null) => (value === null ? null : Number(value.text));
@@ -43,9 +45,9 @@ export function derivationOf(
 			maximum: number(row.maximum)
 		},
 		spread: distribution === undefined ? null : spreadIn(distribution, row.unitScale),
-		facts: distribution === undefined ? [] : limitFacts(row, policy.rules, distribution),
+		facts: distribution === undefined ? [] : limitFacts(row, policy.rules, distribution, decided),
 		withoutLots:
-			distribution === undefined || shown === 'typical'
+			distribution === undefined || shown === 'typical' || decided !== undefined
 				? []
 				: withoutLotTexts(row, shown, policy.rules, distribution),
 		testYield: row.testYield ?? null

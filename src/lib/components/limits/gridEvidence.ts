@@ -1,4 +1,5 @@
 import type { Distribution } from '$lib/core/distributions/summary';
+import type { DecidedLimit } from '$lib/core/limits/decision/limitDecision';
 import { fixed } from '$lib/core/limits/digits';
 import { rowEvidence, type DevicesOutside } from '$lib/core/limits/evidence/rowEvidence';
 import type { LimitRow } from '$lib/core/limits/limit';
@@ -17,14 +18,19 @@ export interface LimitsGridRow extends GridRow {
 	readonly testMaximum: string | null;
 	/** Share of the stored devices that pass the test, or the predicted one, in %. */
 	readonly yieldPercent: string | null;
+	/** Who decided what is printed, where a person did. */
+	readonly decidedBy: string | null;
 }
 
 export function limitsGridRow(
 	row: LimitRow,
 	distribution: Distribution | undefined,
-	rules: LimitPolicy
+	rules: LimitPolicy,
+	decided?: Pick<DecidedLimit, 'by'>
 ): LimitsGridRow {
-	const found = distribution === undefined ? undefined : rowEvidence(distribution, row, rules);
+	const isCircular = decided === undefined;
+	const found =
+		distribution === undefined ? undefined : rowEvidence(distribution, row, rules, isCircular);
 	const capability = found?.capability ?? null;
 	const sides = [found?.minimum ?? null, found?.maximum ?? null];
 	const { testYield } = row;
@@ -42,6 +48,7 @@ export function limitsGridRow(
 		capabilityBound: capability?.lowerBound == null ? null : fixed(capability.lowerBound, 2),
 		testMinimum: row.minimum?.test?.text ?? null,
 		testMaximum: row.maximum?.test?.text ?? null,
+		decidedBy: decided?.by ?? null,
 		yieldPercent: share === null ? null : fixed(share * 100, 1)
 	};
 }

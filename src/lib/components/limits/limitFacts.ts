@@ -1,5 +1,6 @@
 import type { Distribution } from '$lib/core/distributions/summary';
 import type { Side } from '$lib/core/limits/allowance';
+import type { DecidedLimit } from '$lib/core/limits/decision/limitDecision';
 import { fixed, percent, significant } from '$lib/core/limits/digits';
 import type { Capability } from '$lib/core/limits/evidence/capability';
 import { rowEvidence, type DevicesOutside } from '$lib/core/limits/evidence/rowEvidence';
@@ -12,18 +13,30 @@ import { limitsScreenMessages } from '$lib/core/messages/limitsScreen';
 export function limitFacts(
 	row: LimitRow,
 	rules: LimitPolicy,
-	distribution: Distribution
+	distribution: Distribution,
+	decided?: DecidedLimit
 ): { readonly term: string; readonly text: string }[] {
-	const { minimum, maximum, capability } = rowEvidence(distribution, row, rules);
+	const isCircular = decided === undefined;
+	const { minimum, maximum, capability } = rowEvidence(distribution, row, rules, isCircular);
 	const outside = [
 		...(minimum === null ? [] : [outsideText('minimum', minimum)]),
 		...(maximum === null ? [] : [outsideText('maximum', maximum)])
 	];
 	return [
+		...(decided === undefined ? [] : decisionFacts(decided)),
 		...(outside.length === 0 ? [] : [{ term: 'Outside', text: outside.join('; ') }]),
 		...(capability === null
 			? []
 			: [{ term: 'Ppk', text: capabilityText(capability, rules.confidence) }])
+	];
+}
+
+function decisionFacts({ decision, by, at, reason }: DecidedLimit) {
+	const { minimum, typical, maximum } = decision.machine;
+	const machine = [minimum, typical, maximum].map((text) => text ?? '–').join(' / ');
+	return [
+		{ term: 'Machine', text: `${machine} ${decision.unit}` },
+		{ term: 'Decided', text: `${by}, ${at.slice(0, 16).replace('T', ' ')} UTC: ${reason}` }
 	];
 }
 

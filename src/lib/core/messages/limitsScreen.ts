@@ -35,5 +35,34 @@ export const limitsScreenMessages = {
 		`Without ${left.join(', ')} (${plural(lots, 'lot')} with ${plural(devices, 'device')} left).`,
 	circular: () =>
 		'Circular: the limit came from these same devices, so that the index says little of it.',
+	limitUnread: (side: 'minimum' | 'maximum') =>
+		`The ${side} has to be a number above zero, like 14.2, or be left empty.`,
+	decidesNothing: () => 'These are the digits that are printed already; nothing is to be decided.',
+	outOfOrder: (lower: string, upper: string) => `The ${lower} would lie above the ${upper}.`,
+	tooManyOutside: (
+		side: 'minimum' | 'maximum',
+		limit: string,
+		of: {
+			readonly count: number | null;
+			readonly allowed: number;
+			readonly sampleSize: number;
+			readonly basis: string;
+		}
+	) =>
+		`${of.count ?? 'Many'} of ${plural(of.sampleSize, 'device')} lie beyond a ${side} of ${limit}; “${of.basis}” allows ${of.allowed}. Choose a wider limit, or say in the reason what becomes of those devices and tick that they are meant to lie outside.`,
+	uncertaintyUnread: () => 'U has to be a number from zero up, in the unit of the table.',
+	nothingMeasuredHere: () => 'Nothing is measured at this condition, so no limit can be decided.',
+	nothingToTakeBack: () => 'No decision stands here; the machine’s limits are printed.',
+	decided: () => 'Decided. The machine’s limits stand beside it in the derivation.',
+	takenBack: () => 'Taken back. The machine’s limits are printed again.',
+	policyUnchanged: (name: string) => `${name} says the same already; no version was made.`,
+	policyNameTaken: (name: string) => `There is a policy named ${name} already.`,
+	policyNameWithoutLetters: () => 'A name has at least one letter or digit.',
+	policyMovedMeanwhile: (number: number) =>
+		`Somebody made version ${number} meanwhile. What you typed is kept; compare, then save again.`,
+	policySaved: (name: string, number: number) => `${name}, version ${number}, is made.`,
+	policyNotFound: () => 'There is no such limit policy.',
+	olderPolicy: (name: string, used: number, newest: number) =>
+		`${name} has a version ${newest}; this is computed by version ${used}.`,
 	notAsked: () => 'The trial could not be computed just now; the stored limits stand unchanged.'
 };

@@ -58,7 +58,7 @@ export async function bindEverything(
 	return editDraft(db, wanted, async (tx, { draft, at }): Promise<Edit<EverythingBound>> => {
 		const bindings = new Map<string, Binding | null>(draft.bindings);
 		for (const { place, terms } of matches) {
-			const binding: LimitBinding = { kind: 'limit', ...terms, kept: null, at };
+			const binding: LimitBinding = { kind: 'limit', ...terms, at };
 			bindings.set(place.slot, bindPlace(bindings.get(place.slot) ?? undefined, place, binding));
 		}
 		for (const slot of new Set(matches.map(({ place }) => place.slot)))

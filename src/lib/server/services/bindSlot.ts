@@ -10,6 +10,7 @@ import type { Connection } from '../db/database';
 import { findPolicyVersion } from '../db/findPolicies';
 import { findProductByPartNumber } from '../db/findProductByPartNumber';
 import type { Stores } from '../work/stores';
+import { decidedTexts } from './decidedTexts';
 import { computeLimits } from './draftLimits';
 import {
 	editDraft,
@@ -52,7 +53,7 @@ export async function bindSlot(
 	if (candidate.status === 'refused') return candidate;
 
 	return editDraft(db, wanted, async (tx, { draft, at }): Promise<Edit<BindOutcome>> => {
-		const binding: LimitBinding = { kind: 'limit', ...candidate.terms, kept: null, at };
+		const binding: LimitBinding = { kind: 'limit', ...candidate.terms, at };
 		const next = bindPlace(draft.bindings.get(place.slot), place, binding);
 		await storeBinding(tx, { draft: draft.id, slot: place.slot }, next);
 		return {
@@ -65,7 +66,7 @@ export async function bindSlot(
 	});
 }
 
-type Terms = Pick<LimitBinding, 'policyVersion' | 'basis' | 'basisReason' | 'printed'>;
+type Terms = Omit<LimitBinding, 'kind' | 'at'>;
 type Candidate = { readonly status: 'carried'; readonly terms: Terms } | Refused;
 
 /** What would be bound here, or why nothing can be. */
@@ -97,7 +98,13 @@ export async function candidateFor(
 					?.find(({ condition }) => condition.reverseVoltage === asked.bias)
 			: (await computeLimits(db, product.id, [asked])).limits.get(asked.slot)?.[0];
 	if (row === undefined) return refuse(draftMessages.nothingComputed(place.label));
-	const printed = boundTextsOf(row, { basis, rules: policy.rules });
+	const decided = await decidedTexts(db, product.id, {
+		row,
+		policyVersion: policyId,
+		basis,
+		machine: boundTextsOf(row, { basis, rules: policy.rules })
+	});
+	const { printed } = decided;
 	const needed = neededParts(place.required, {
 		bias: place.bias,
 		declaredBasis: wanted.basis ?? held?.basis
@@ -111,7 +118,7 @@ export async function candidateFor(
 		);
 	if (wanted.expected !== undefined && wanted.expected !== printed.inputHash)
 		return refused(draftMessages.movedMeanwhile());
-	return { status: 'carried', terms: { policyVersion: policyId, basis, basisReason, printed } };
+	return { status: 'carried', terms: { policyVersion: policyId, basis, basisReason, ...decided } };
 }
 
 /** What a computation gives by itself; the other bases are declared, with a reason. */

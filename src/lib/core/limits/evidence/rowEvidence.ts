@@ -28,7 +28,9 @@ export interface RowEvidence {
 export function rowEvidence(
 	distribution: Distribution,
 	row: Pick<LimitRow, 'minimum' | 'maximum' | 'basis'>,
-	rules: Pick<LimitPolicy, 'content' | 'confidence'>
+	rules: Pick<LimitPolicy, 'content' | 'confidence'>,
+	/** Whether the limits came from these same devices; yes, unless a person decided them. */
+	isCircular = true
 ): RowEvidence {
 	const { minimum, maximum, basis } = row;
 	const { lowest } = distribution.extremes;
@@ -46,7 +48,7 @@ export function rowEvidence(
 					...(minimum === null ? {} : { minimum: minimum.printed }),
 					...(maximum === null ? {} : { maximum: maximum.printed })
 				},
-				{ confidence: rules.confidence, isCircular: true }
+				{ confidence: rules.confidence, isCircular }
 			) ?? null
 	};
 }

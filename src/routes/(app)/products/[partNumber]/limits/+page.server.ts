@@ -1,24 +1,39 @@
-import { error } from '@sveltejs/kit';
+import { error, fail } from '@sveltejs/kit';
+import { superValidate } from 'sveltekit-superforms';
+import { zod as zod4 } from 'superforms-zod';
 import { derivationOf, shownSide } from '$lib/components/limits/derivationOf';
 import { limitsGridRow } from '$lib/components/limits/gridEvidence';
 import { whatIfFields, type WhatIfCondition } from '$lib/components/limits/whatIfForm';
 import { describePolicy, methodText } from '$lib/core/limits/describePolicy';
+import type { DecidedLimit } from '$lib/core/limits/decision/limitDecision';
 import { driftText } from '$lib/core/limits/driftText';
 import { resolutionText } from '$lib/core/limits/resolutionText';
+import type { LimitRow } from '$lib/core/limits/limit';
+import { readNumber } from '$lib/core/units/readNumber';
+import { draftMessages } from '$lib/core/messages/datasheet';
 import { limitMessages } from '$lib/core/messages/limits';
+import { limitsScreenMessages } from '$lib/core/messages/limitsScreen';
+import { isPermitted } from '$lib/core/review/permissions';
+import { limitDecisionForm, limitTakeBackForm } from '$lib/forms/limitDecision';
 import { requirePermission } from '$lib/server/auth/requirePermission';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
+import { decideLimit, takeBackDecision } from '$lib/server/services/decideLimit';
 import { limitsChoice } from '$lib/server/services/limitsChoice';
 import type { LimitGroup } from '$lib/server/services/limitsOverview';
 import { limitsProgress } from '$lib/server/services/limitsProgress';
 import { limitsScreen, type LimitsScreen } from '$lib/server/services/limitsScreen';
 import { trialOf } from './trialOf';
-import type { PageServerLoad } from './$types';
+import type { Actions, PageServerLoad } from './$types';
 
-const NOTHING: LimitsScreen = { groups: [], distributions: new Map(), lots: [] };
+const NOTHING: LimitsScreen = {
+	groups: [],
+	distributions: new Map(),
+	decided: new Map(),
+	lots: []
+};
 
 export const load: PageServerLoad = async ({ locals, params, url, depends }) => {
-	requirePermission(locals, 'limit.read');
+	const person = requirePermission(locals, 'limit.read');
 	depends('platen:data');
 	const { db } = locals;
 	const product = await findProductByPartNumber(db, params.partNumber);
@@ -33,10 +48,11 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 					product: product.id,
 					basisHash,
 					policyVersion: policy.id,
-					declaredBasis: basis
+					declaredBasis: basis,
+					rules: policy.rules
 				});
 
-	const { groups, distributions, lots } = screen;
+	const { groups, distributions, decided, lots } = screen;
 	const asked = url.searchParams.get('row');
 	const row = groups.flatMap((of) => of.rows).find((of) => of.conditionKey === asked);
 	const conditions = groups.flatMap(conditionsOf);
@@ -70,7 +86,12 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 						frequency: frequency ?? null,
 						unit,
 						rows: rows.map((of) =>
-							limitsGridRow(of, distributions.get(of.conditionKey), policy.rules)
+							limitsGridRow(
+								of,
+								distributions.get(of.conditionKey),
+								policy.rules,
+								decided.get(of.conditionKey)
+							)
 						)
 					})),
 		trial:
@@ -95,10 +116,74 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 						row,
 						shownSide(url.searchParams),
 						policy,
-						distributions.get(row.conditionKey)
-					)
+						distributions.get(row.conditionKey),
+						decided.get(row.conditionKey)
+					),
+		decision: decisionOf(row, {
+			decided: decided.get(row?.conditionKey ?? ''),
+			mayDecide: isPermitted(person.roles, 'limit.decide'),
+			isOpen: url.searchParams.has('decide')
+		})
 	};
 };
+
+const digits = (text: string) => (text === '' ? null : text);
+
+export const actions: Actions = {
+	decide: async ({ locals, params, request }) => {
+		const person = requirePermission(locals, 'limit.decide');
+		const form = await superValidate(request, zod4(limitDecisionForm));
+		const { testerUncertainty, minimum, maximum, ...rest } = form.data;
+		const values = form.data;
+		if (!form.valid) return fail(400, { message: draftMessages.formUnread(), values });
+		const uncertainty = testerUncertainty === '' ? null : readNumber(testerUncertainty);
+		if (uncertainty === undefined || (uncertainty !== null && uncertainty < 0)) {
+			return fail(400, { message: limitsScreenMessages.uncertaintyUnread(), values });
+		}
+		const outcome = await decideLimit(locals, {
+			...rest,
+			partNumber: params.partNumber,
+			minimum: digits(minimum),
+			maximum: digits(maximum),
+			testerUncertainty: uncertainty,
+			by: person.id
+		});
+		if (outcome.status === 'refused') return fail(409, { message: outcome.message, values });
+		return { done: limitsScreenMessages.decided() };
+	},
+	takeBack: async ({ locals, params, request }) => {
+		const person = requirePermission(locals, 'limit.decide');
+		const form = await superValidate(request, zod4(limitTakeBackForm));
+		if (!form.valid) return fail(400, { message: draftMessages.formUnread() });
+		const outcome = await takeBackDecision(locals, {
+			...form.data,
+			partNumber: params.partNumber,
+			by: person.id
+		});
+		if (outcome.status === 'refused') return fail(409, { message: outcome.message });
+		return { done: limitsScreenMessages.takenBack() };
+	}
+};
+
+/** What the form beside a derivation starts from; `null` where nothing may be decided. */
+function decisionOf(
+	row: LimitRow | undefined,
+	of: {
+		readonly decided: DecidedLimit | undefined;
+		readonly mayDecide: boolean;
+		readonly isOpen: boolean;
+	}
+) {
+	if (row === undefined || !of.mayDecide) return null;
+	return {
+		conditionKey: row.conditionKey,
+		unit: row.unit,
+		minimum: row.minimum?.text ?? '',
+		maximum: row.maximum?.text ?? '',
+		isDecided: of.decided !== undefined,
+		isOpen: of.isOpen
+	};
+}
 
 function conditionsOf({ temperatureCelsius, frequency, rows }: LimitGroup): WhatIfCondition[] {
 	return rows.map(({ conditionKey: key, condition }) => ({

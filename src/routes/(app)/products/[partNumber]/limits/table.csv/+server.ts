@@ -1,10 +1,11 @@
 import { error } from '@sveltejs/kit';
 import { csvText } from '$lib/core/csvText';
+import type { DecidedLimit } from '$lib/core/limits/decision/limitDecision';
 import { limitMessages } from '$lib/core/messages/limits';
 import { requirePermission } from '$lib/server/auth/requirePermission';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
 import { limitsChoice } from '$lib/server/services/limitsChoice';
-import { limitsOverview } from '$lib/server/services/limitsOverview';
+import { limitsScreen } from '$lib/server/services/limitsScreen';
 import type { RequestHandler } from './$types';
 
 const HEAD = [
@@ -17,6 +18,7 @@ const HEAD = [
 	'maximum',
 	'unit',
 	'basis',
+	'decided_by',
 	'policy',
 	'policy_version',
 	'devices',
@@ -32,14 +34,15 @@ export const GET: RequestHandler = async ({ locals, params, url }) => {
 	const product = await findProductByPartNumber(locals.db, params.partNumber);
 	if (product === undefined) error(404, limitMessages.noSuchProduct(params.partNumber));
 	const { policy, basis } = await limitsChoice(locals.db, url.searchParams);
-	const groups =
+	const { groups, decided } =
 		product.basisHash === null || policy === undefined
-			? []
-			: await limitsOverview(locals.db, {
+			? { groups: [], decided: new Map<string, DecidedLimit>() }
+			: await limitsScreen(locals.db, {
 					product: product.id,
 					basisHash: product.basisHash,
 					policyVersion: policy.id,
-					declaredBasis: basis
+					declaredBasis: basis,
+					rules: policy.rules
 				});
 	const lines = groups.flatMap(({ rows }) =>
 		rows.map((row) => [
@@ -52,6 +55,7 @@ export const GET: RequestHandler = async ({ locals, params, url }) => {
 			row.maximum?.text ?? '',
 			row.unit,
 			row.basis,
+			decided.get(row.conditionKey)?.by ?? '',
 			policy?.rules.name ?? '',
 			policy?.number ?? '',
 			row.sampleSize,
