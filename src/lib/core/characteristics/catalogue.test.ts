@@ -28,6 +28,16 @@ describe('the catalogue of characteristics', () => {
 		expect(findCharacteristic(key)).toMatchObject({ unit, transform, measuredAs: 'reading' });
 	});
 
+	it.each([
+		['C_ratio', '', 'ln'],
+		['Q_C', 'C', 'ln'],
+		['E_C', 'J', 'ln'],
+		['Q', '', 'ln'],
+		['α_C', '1/K', 'identity']
+	])('computes %s in %s device by device, summed up by %s', (key, unit, transform) => {
+		expect(findCharacteristic(key)).toMatchObject({ unit, transform, measuredAs: 'derived' });
+	});
+
 	it('does not know what nobody measures', () => {
 		expect(findCharacteristic('C_j')).toBeUndefined();
 	});

@@ -11,8 +11,13 @@ export interface Characteristic {
 	readonly unit: string;
 	/** What its value depends on, beside the junction temperature; a reading always states the first. */
 	readonly axes: readonly Exclude<keyof Condition, 'temperatureCelsius'>[];
-	/** Whether files give it as sweeps along the bias or as single readings. */
-	readonly measuredAs: 'sweep' | 'reading';
+	/**
+	 * Whether files give it as sweeps along the bias or as single readings, or it is computed device
+	 * by device from what they give.
+	 */
+	readonly measuredAs: 'sweep' | 'reading' | 'derived';
+	/** Which limits are promised of it when nobody says otherwise. */
+	readonly promised: readonly ('minimum' | 'maximum')[];
 	/** How values are transformed before they are summed up, unless somebody overrides it. */
 	readonly transform: 'identity' | 'ln' | 'log10';
 	/** Whether it can only fall as reverse bias rises. */
@@ -21,7 +26,7 @@ export interface Characteristic {
 
 /**
  * Characteristics that measurements give. Letter symbols follow IEC 60747-1. A new one is one more
- * entry here, and a reader that fills it.
+ * entry here, and a reader that fills it; a derived one is computed in `derivedColumns`.
  */
 export const CHARACTERISTICS = [
 	{
@@ -31,6 +36,7 @@ export const CHARACTERISTICS = [
 		unit: 'F',
 		axes: ['frequency', 'reverseVoltage'],
 		measuredAs: 'sweep',
+		promised: ['minimum', 'maximum'],
 		transform: 'ln',
 		fallsWithReverseVoltage: true
 	},
@@ -41,6 +47,7 @@ export const CHARACTERISTICS = [
 		unit: 'V',
 		axes: ['forwardCurrent', 'pulseDuration'],
 		measuredAs: 'reading',
+		promised: ['maximum'],
 		transform: 'identity',
 		fallsWithReverseVoltage: false
 	},
@@ -51,6 +58,7 @@ export const CHARACTERISTICS = [
 		unit: 'A',
 		axes: ['reverseVoltage', 'pulseDuration'],
 		measuredAs: 'reading',
+		promised: ['maximum'],
 		transform: 'ln',
 		fallsWithReverseVoltage: false
 	},
@@ -61,6 +69,7 @@ export const CHARACTERISTICS = [
 		unit: 'V',
 		axes: ['reverseCurrent', 'pulseDuration'],
 		measuredAs: 'reading',
+		promised: ['minimum'],
 		transform: 'identity',
 		fallsWithReverseVoltage: false
 	},
@@ -71,6 +80,7 @@ export const CHARACTERISTICS = [
 		unit: 'Ω',
 		axes: ['frequency', 'reverseVoltage', 'forwardCurrent'],
 		measuredAs: 'reading',
+		promised: ['maximum'],
 		transform: 'ln',
 		fallsWithReverseVoltage: false
 	},
@@ -81,6 +91,7 @@ export const CHARACTERISTICS = [
 		unit: 's',
 		axes: ['forwardCurrent', 'reverseVoltage', 'reverseCurrent', 'currentSlope'],
 		measuredAs: 'reading',
+		promised: ['maximum'],
 		transform: 'ln',
 		fallsWithReverseVoltage: false
 	},
@@ -91,6 +102,7 @@ export const CHARACTERISTICS = [
 		unit: 'K/W',
 		axes: [],
 		measuredAs: 'reading',
+		promised: ['maximum'],
 		transform: 'ln',
 		fallsWithReverseVoltage: false
 	},
@@ -101,7 +113,63 @@ export const CHARACTERISTICS = [
 		unit: 'K/W',
 		axes: [],
 		measuredAs: 'reading',
+		promised: ['maximum'],
 		transform: 'ln',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 'C_ratio',
+		symbol: { quantity: 'C', subscript: 'ratio' },
+		name: 'Capacitance ratio, device by device',
+		unit: '',
+		axes: ['frequency', 'reverseVoltage', 'secondReverseVoltage'],
+		measuredAs: 'derived',
+		promised: ['minimum', 'maximum'],
+		transform: 'ln',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 'Q_C',
+		symbol: { quantity: 'Q', subscript: 'C' },
+		name: 'Capacitive charge from 0 V',
+		unit: 'C',
+		axes: ['frequency', 'reverseVoltage'],
+		measuredAs: 'derived',
+		promised: ['maximum'],
+		transform: 'ln',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 'E_C',
+		symbol: { quantity: 'E', subscript: 'C' },
+		name: 'Capacitive energy from 0 V',
+		unit: 'J',
+		axes: ['frequency', 'reverseVoltage'],
+		measuredAs: 'derived',
+		promised: ['maximum'],
+		transform: 'ln',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 'Q',
+		symbol: { quantity: 'Q' },
+		name: 'Quality factor',
+		unit: '',
+		axes: ['frequency', 'reverseVoltage'],
+		measuredAs: 'derived',
+		promised: ['minimum'],
+		transform: 'ln',
+		fallsWithReverseVoltage: false
+	},
+	{
+		key: 'α_C',
+		symbol: { quantity: 'α', subscript: 'C' },
+		name: 'Temperature coefficient of capacitance',
+		unit: '1/K',
+		axes: ['frequency', 'reverseVoltage'],
+		measuredAs: 'derived',
+		promised: ['minimum', 'maximum'],
+		transform: 'identity',
 		fallsWithReverseVoltage: false
 	}
 ] as const satisfies readonly Characteristic[];

@@ -11,6 +11,8 @@ export const condition = z.object({
 	frequency: z.number().positive().optional(),
 	/** Reverse bias in V, positive. */
 	reverseVoltage: z.number().optional(),
+	/** Second reverse bias in V, where a value compares two: the one a ratio divides by. */
+	secondReverseVoltage: z.number().optional(),
 	/** Forward current in A, positive. */
 	forwardCurrent: z.number().positive().optional(),
 	/** Reverse current in A, positive: at which a breakdown voltage is read. */
@@ -27,6 +29,7 @@ export const CONDITION_KEYS = {
 	temperatureCelsius: 'T',
 	frequency: 'f',
 	reverseVoltage: 'VR',
+	secondReverseVoltage: 'VR2',
 	forwardCurrent: 'IF',
 	reverseCurrent: 'IR',
 	pulseDuration: 'tp',

@@ -7,6 +7,10 @@ it.each([
 		{ temperatureCelsius: -40, frequency: 1e8, forwardCurrent: 0.01 },
 		'f = 100 MHz, I_F = 10 mA, −40 °C'
 	],
+	[
+		{ temperatureCelsius: 25, frequency: 1e6, reverseVoltage: 1, secondReverseVoltage: 28 },
+		'f = 1 MHz, V_R = 1 V, second V_R = 28 V, 25 °C'
+	],
 	[{ temperatureCelsius: 25, reverseVoltage: 0 }, 'V_R = 0 V, 25 °C'],
 	[
 		{ temperatureCelsius: 25, reverseCurrent: 1.25e-5, pulseDuration: 3e-4 },

@@ -8,6 +8,7 @@ const FIGURES = 9;
 const PARTS = {
 	frequency: ['f', 'Hz'],
 	reverseVoltage: ['V_R', 'V'],
+	secondReverseVoltage: ['second V_R', 'V'],
 	forwardCurrent: ['I_F', 'A'],
 	reverseCurrent: ['I_R', 'A'],
 	pulseDuration: ['t_p', 's'],
@@ -19,6 +20,7 @@ const PARTS = {
 const NAMES = [
 	'frequency',
 	'reverseVoltage',
+	'secondReverseVoltage',
 	'forwardCurrent',
 	'reverseCurrent',
 	'pulseDuration',

@@ -2,6 +2,7 @@ import { engineeringText, withUnit } from './printNumber';
 
 interface Conditions {
 	readonly reverseVoltage?: number | undefined;
+	readonly secondReverseVoltage?: number | undefined;
 	readonly frequency?: number | undefined;
 	readonly temperatureCelsius?: number | undefined;
 	readonly forwardCurrent?: number | undefined;
@@ -18,7 +19,7 @@ export function conditionText(of: Conditions): string {
 	return [
 		...(of.reverseVoltage === undefined
 			? []
-			: [`V_R = ${withUnit(String(of.reverseVoltage), 'V')}`]),
+			: [`V_R = ${biasText(of.reverseVoltage, of.secondReverseVoltage)}`]),
 		...engineering('I_F', of.forwardCurrent, 'A'),
 		...engineering('I_R', of.reverseCurrent, 'A'),
 		...(of.currentSlope === undefined
@@ -32,6 +33,12 @@ export function conditionText(of: Conditions): string {
 			: [`T_j = ${temperatureText(of.temperatureCelsius)}`])
 	].join(', ');
 }
+
+/** `1 V and 28 V` where two biases are compared. */
+const biasText = (bias: number, second: number | undefined) =>
+	[bias, ...(second === undefined ? [] : [second])]
+		.map((value) => withUnit(String(value), 'V'))
+		.join(' and ');
 
 const engineering = (symbol: string, value: number | undefined, unit: string): string[] =>
 	value === undefined ? [] : [`${symbol} = ${engineeringText(value, unit)}`];

@@ -125,6 +125,8 @@ export class ReadingLineReader {
 		const found = recogniseCharacteristic(read);
 		if (found === undefined) return refuse(measurementMessages.characteristicUnknown(read));
 		if (found.measuredAs === 'sweep') refuse(measurementMessages.characteristicSwept(found.key));
+		if (found.measuredAs === 'derived')
+			refuse(measurementMessages.characteristicDerived(found.key));
 		return found;
 	}
 

@@ -1,7 +1,7 @@
 import { CHARACTERISTICS } from '../characteristics/catalogue';
 import type { Characteristic } from '../characteristics/catalogue';
 
-const bare = (text: string) => text.toLowerCase().replace(/[^a-z0-9]/g, '');
+const bare = (text: string) => text.toLowerCase().replace(/[^\p{L}\p{N}]/gu, '');
 
 const BY_NAME: ReadonlyMap<string, Characteristic> = new Map(
 	CHARACTERISTICS.flatMap((entry) => [

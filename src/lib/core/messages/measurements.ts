@@ -101,6 +101,8 @@ export const measurementMessages = {
 		`“${read}” is no characteristic that readings give; write a symbol such as V_F, I_R or V_(BR).`,
 	characteristicSwept: (key: string) =>
 		`${key} is measured in sweeps along the bias; upload those as a file of sweeps.`,
+	characteristicDerived: (key: string) =>
+		`${key} is computed from the readings of each device; upload those instead.`,
 	unitEmpty: () => 'The unit is empty; nothing is guessed.',
 	unitForeign: (key: string, read: string) => `“${read}” is no unit of ${key}.`,
 	unitDiffers: (key: string, before: string, now: string) =>

@@ -115,13 +115,16 @@ export async function enterDistribution(
 	});
 }
 
-/** Sweeps state every axis, readings at least the first; none states what is no axis. */
+/**
+ * Sweeps and what is computed from them state every axis, readings at least the first; none states
+ * what is no axis.
+ */
 function conditionProblem(
 	{ key, axes, measuredAs }: Characteristic,
 	at: Condition
 ): string | undefined {
 	const stated = condition.keyof().options.filter((part) => at[part] !== undefined);
-	const required = measuredAs === 'sweep' ? axes : axes.slice(0, 1);
+	const required = measuredAs === 'reading' ? axes.slice(0, 1) : axes;
 	const missing = required.find((axis) => !stated.includes(axis));
 	if (missing !== undefined) return distributionMessages.conditionMissing(key, missing);
 	const unused = stated.find((part) => part !== 'temperatureCelsius' && !axes.includes(part));
