@@ -61,6 +61,7 @@ export const ACCESS: Readonly<Record<string, Access>> = {
 	'/products/[partNumber]/edit action addRow': 'product.edit',
 	'/products/[partNumber]/edit action removeRow': 'product.edit',
 	'/products/[partNumber]/cv load': 'limit.read',
+	'/products/[partNumber]/cv/band.json GET': 'limit.read',
 	'/products/[partNumber]/cv/model.lib GET': 'limit.read',
 	'/products/[partNumber]/cv/sweeps.json GET': 'measurement.read',
 	'/products/[partNumber]/cv/table.csv GET': 'limit.read',

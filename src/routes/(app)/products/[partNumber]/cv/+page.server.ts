@@ -1,4 +1,6 @@
 import { error } from '@sveltejs/kit';
+import { componentShares } from '$lib/components/cv/componentShares';
+import { junctionOnPage } from '$lib/components/cv/junctionOnPage';
 import { spreadIn } from '$lib/components/limits/derivationOf';
 import { gridRow } from '$lib/components/limits/gridRow';
 import { describePolicy } from '$lib/core/limits/describePolicy';
@@ -7,6 +9,7 @@ import { readNumber } from '$lib/core/units/readNumber';
 import { requirePermission } from '$lib/server/auth/requirePermission';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
 import { chosenCurve } from '$lib/server/services/chosenCurve';
+import { curveJunction } from '$lib/server/services/curveJunction';
 import { limitsProgress } from '$lib/server/services/limitsProgress';
 import type { PageServerLoad } from './$types';
 
@@ -43,6 +46,7 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 						temperatureCelsius: curve.temperatureCelsius,
 						frequency: curve.frequency ?? null,
 						unit: curve.unit,
+						unitScale: curve.unitScale,
 						rows: rows.map(({ limit, betweenPercent, withinPercent }) => ({
 							...gridRow(limit),
 							betweenPercent,
@@ -54,7 +58,13 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 				? null
 				: {
 						row: gridRow(selected.limit),
-						spread: spreadIn(selected.distribution, curve.unitScale)
-					}
+						spread: spreadIn(selected.distribution, curve.unitScale),
+						shares:
+							selected.distribution.components === null
+								? []
+								: componentShares(selected.distribution.components)
+					},
+		junction:
+			curve === undefined ? null : junctionOnPage(await curveJunction(locals.db, product, curve))
 	};
 };
