@@ -3,7 +3,7 @@ import { plainText } from '../../../../core/datasheet/plainText';
 import { describeChart } from '../../../../plot/characteristicChart';
 import { circuitSketch } from '../../../../plot/circuitSketch';
 import { halfPrintTheme, printTheme } from '../../../../plot/chartTheme';
-import { moveBoxes, type Box } from '../box';
+import { moveBoxes } from '../box';
 import type { Section } from '../flow';
 import { GUTTER, MEASURE, mm } from '../paper';
 import type { SectionOf, Sheet } from '../sheet';
