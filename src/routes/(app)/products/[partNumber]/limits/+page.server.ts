@@ -16,6 +16,9 @@ import { limitsScreenMessages } from '$lib/core/messages/limitsScreen';
 import { isPermitted } from '$lib/core/review/permissions';
 import { limitDecisionForm, limitTakeBackForm } from '$lib/forms/limitDecision';
 import { requirePermission } from '$lib/server/auth/requirePermission';
+import type { Connection } from '$lib/server/db/database';
+import { findDraftPolicy } from '$lib/server/db/findDraftPolicy';
+import { findPolicyVersion, type StoredPolicy } from '$lib/server/db/findPolicies';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
 import { decideLimit, takeBackDecision } from '$lib/server/services/decideLimit';
 import { limitsChoice } from '$lib/server/services/limitsChoice';
@@ -65,9 +68,11 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 			policy: policy?.id ?? null,
 			policyName: policy?.rules.name ?? '',
 			basis,
-			words: policy === undefined ? '' : describePolicy(policy.rules)
+			words: policy === undefined ? '' : describePolicy(policy.rules),
+			older: olderText(policy, policies)
 		},
-		policies: policies.map(({ id, number, rules }) => ({
+		draftPolicy: await draftPolicyText(db, product.id, policies),
+		policies: withChosen(policies, policy).map(({ id, number, rules }) => ({
 			id,
 			number,
 			name: rules.name,
@@ -126,6 +131,37 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 		})
 	};
 };
+
+/** The newest versions, and the chosen one where it is older. */
+function withChosen(policies: readonly StoredPolicy[], chosen: StoredPolicy | undefined) {
+	return chosen === undefined || policies.some(({ id }) => id === chosen.id)
+		? policies
+		: [...policies, chosen];
+}
+
+/** Says that a version isn't the newest of its policy; `null` where it is. */
+function olderText(
+	used: StoredPolicy | undefined,
+	policies: readonly StoredPolicy[]
+): string | null {
+	const newest = policies.find(({ policy }) => policy === used?.policy);
+	return used === undefined || newest === undefined || newest.id === used.id
+		? null
+		: limitsScreenMessages.olderPolicy(newest.rules.name, used.number, newest.number);
+}
+
+/** The same of the policy that the product's draft binds by. */
+async function draftPolicyText(
+	db: Connection,
+	product: number,
+	policies: readonly StoredPolicy[]
+): Promise<{ readonly id: number; readonly text: string } | null> {
+	const bindsBy = await findDraftPolicy(db, product);
+	if (bindsBy === undefined) return null;
+	const used = await findPolicyVersion(db, bindsBy);
+	const text = olderText(used, policies);
+	return used === undefined || text === null ? null : { id: used.id, text };
+}
 
 const digits = (text: string) => (text === '' ? null : text);
 
