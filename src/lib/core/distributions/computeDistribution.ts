@@ -2,11 +2,12 @@ import { mapNumbers } from '../stats/mapNumbers';
 import { mean as meanOf } from '../stats/mean';
 import { quantile } from '../stats/quantile';
 import { skewness } from '../stats/skewness';
+import { sortNumbers } from '../stats/sortNumbers';
 import { censoringOf } from './censorReadings';
 import { componentsOf } from './componentsOf';
 import { TransformDomainError } from './errors';
 import { extremesOf } from './extremes';
-import { groupMembers, type Members } from './groupMembers';
+import { groupMembers, type Members, type TransformedMembers } from './groupMembers';
 import type { GroupName } from './indexDevices';
 import type { Censoring, Distribution, DistributionSummary, Group, Transform } from './summary';
 import { TRANSFORMS } from './transforms';
@@ -60,7 +61,7 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 	const { transform, values, censored } = input;
 	const censoring = censored && censoringOf({ values, censored });
 	const bounded = withinBounds(values, censoring);
-	const sorted = presentOf(bounded).sort();
+	const sorted = sortNumbers(presentOf(bounded));
 	if (sorted.length === 0) return undefined;
 	const lowest = sorted[0] ?? Number.NaN;
 	if (transform !== 'identity' && lowest <= 0) throw new TransformDomainError(transform, lowest);
@@ -68,8 +69,9 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 	const { apply } = TRANSFORMS[transform];
 	const observed = observedOf(sorted, censoring);
 	const all = groupMembers(bounded, input.groupOf, input.groups);
-	const members = censoring ? all.flatMap((of) => observedMembers(of, censoring)) : all;
-	const groups = members.map((of) => sumsOf(of, apply));
+	const exact = censoring ? all.flatMap((of) => observedMembers(of, censoring)) : all;
+	const members = exact.map((of) => ({ ...of, transformed: mapNumbers(of.sorted, apply) }));
+	const groups = members.map(sumsOf);
 	const transformed = mapNumbers(observed.length === 0 ? sorted : observed, apply);
 	const mean = meanOf(transformed);
 	const sumOfSquares = sum(
@@ -97,7 +99,7 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 		quarantined: input.quarantined,
 		origin: 'measured',
 		...(censoring && { censoring }),
-		normality: censoring ? null : withinLotNormality(members, apply),
+		normality: censoring ? null : withinLotNormality(members),
 		components: censoring ? null : componentsOf(groups),
 		groups,
 		extremes: extremesOf(sorted)
@@ -109,7 +111,7 @@ function presentOf(values: Float64Array): Float64Array {
 	let count = 0;
 	for (let i = 0; i < values.length; i++)
 		if (!Number.isNaN(values[i]!)) present[count++] = values[i]!;
-	return present.slice(0, count);
+	return present.subarray(0, count);
 }
 
 /** Every device beyond a bound stands at the bound. */
@@ -133,8 +135,7 @@ function observedMembers({ name, sorted }: Members, { floor, ceiling }: Censorin
 }
 
 /** Two passes: the mean first, then the squares around it. */
-function sumsOf({ name, sorted }: Members, apply: (value: number) => number): Group {
-	const transformed = mapNumbers(sorted, apply);
+function sumsOf({ name, sorted, transformed }: TransformedMembers): Group {
 	const mean = meanOf(transformed);
 	let sumOfSquares = 0;
 	for (let i = 0; i < transformed.length; i++) sumOfSquares += (transformed[i]! - mean) ** 2;

@@ -1,9 +1,15 @@
+import { sortNumbers } from '../stats/sortNumbers';
 import type { GroupName } from './indexDevices';
 
 /** The devices that share a lot and wafer, their values ascending. */
 export interface Members {
 	readonly name: GroupName;
 	readonly sorted: Float64Array;
+}
+
+/** The same with what is summed up of each, as ascending as the values. */
+export interface TransformedMembers extends Members {
+	readonly transformed: Float64Array;
 }
 
 /**
@@ -27,7 +33,7 @@ export function groupMembers(
 		members[group]![filled[group]!++] = value;
 	}
 	return groups.flatMap((name, group) => {
-		const sorted = members[group]?.sort() ?? new Float64Array();
-		return sorted.length === 0 ? [] : [{ name, sorted }];
+		const unsorted = members[group]!;
+		return unsorted.length === 0 ? [] : [{ name, sorted: sortNumbers(unsorted) }];
 	});
 }

@@ -1,5 +1,6 @@
 import { SampleTooSmallError, OutsideDomainError } from './errors';
 import { mean } from './mean';
+import { sortNumbers } from './sortNumbers';
 import { standardDeviation } from './standardDeviation';
 import { tabulatedLogTail } from './tabulatedLogTail';
 
@@ -43,9 +44,9 @@ export function andersonDarling(values: ArrayLike<number>): AndersonDarling {
 	const centre = mean(values);
 	const deviation = standardDeviation(values);
 	if (!(deviation > 0)) throw new OutsideDomainError('andersonDarling', 'a spread', deviation);
-	const z = new Float64Array(count);
-	for (let i = 0; i < count; i++) z[i] = (values[i]! - centre) / deviation;
-	z.sort();
+	const standardized = new Float64Array(count);
+	for (let i = 0; i < count; i++) standardized[i] = (values[i]! - centre) / deviation;
+	const z = sortNumbers(standardized);
 	let sum = 0;
 	for (let i = 0; i < count; i++)
 		sum += (2 * i + 1) * tabulatedLogTail(z[i]!) + (2 * (count - i) - 1) * tabulatedLogTail(-z[i]!);

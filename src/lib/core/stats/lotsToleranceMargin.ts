@@ -103,9 +103,11 @@ function solve(
 ): number {
 	const fine = confidenceOf(strata, z, 1);
 	const wide = confidenceOf(strata, z, SCOUT);
+	/** Steps this wide don't quite add up to 1; what they promise in the end makes up for it. */
+	const whole = wide(Infinity);
 	return solveNear(
 		(reach) => fine(reach) - confidence,
-		(reach) => wide(reach) - confidence,
+		(reach) => wide(reach) / whole - confidence,
 		Math.abs(z) * scale,
 		scale
 	);
@@ -149,11 +151,12 @@ function pairNodes(
 	const weight = new Float64Array(size);
 	let count = 0;
 	for (let i = 0; i < between.values.length; i++) {
+		const [value, ofLots] = [between.values[i]!, between.weights[i]!];
 		const inverseHere = 1 / Math.sqrt(ofMean[i]! + Number.MIN_VALUE);
 		for (let j = 0; j < inside.values.length; j++) {
-			const product = between.weights[i]! * inside.weights[j]!;
+			const product = ofLots * inside.weights[j]!;
 			if (product < NEGLIGIBLE) continue;
-			reach[count] = z * Math.sqrt(between.values[i]! + inside.values[j]!);
+			reach[count] = z * Math.sqrt(value + inside.values[j]!);
 			inverse[count] = inverseHere;
 			weight[count] = product;
 			count++;
