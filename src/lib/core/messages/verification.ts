@@ -47,3 +47,6 @@ export const wholeCurveHasOneRoute = () =>
 
 export const censoredHasOneRoute = (count: number) =>
 	`${count} ${count === 1 ? 'reading is' : 'readings are'} censored, and there is no second route to a censored likelihood`;
+
+export const derivedHasOneRoute = (name: string) =>
+	`${name} is computed from several readings of a device, and there is no second route to it`;

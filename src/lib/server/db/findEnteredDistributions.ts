@@ -4,13 +4,17 @@ import type { Distribution } from '$lib/core/distributions/summary';
 import type { Database } from './database';
 import { enteredDistribution as enteredTable } from './schema';
 
-/** The newest distribution entered for each condition at one temperature, whether used or not. */
+/**
+ * The newest distribution entered for each condition, at one temperature or at all, whether used or
+ * not.
+ */
 export async function findEnteredDistributions(
 	db: Database,
 	at: {
 		readonly product: number;
 		readonly characteristic: string;
-		readonly temperatureCelsius: number;
+		/** Default: every temperature. */
+		readonly temperatureCelsius?: number;
 	}
 ): Promise<Distribution[]> {
 	const rows = await db
@@ -20,7 +24,9 @@ export async function findEnteredDistributions(
 			and(
 				eq(enteredTable.product, at.product),
 				eq(enteredTable.characteristic, at.characteristic),
-				like(sql`${enteredTable.conditionKey} || ';'`, `T=${at.temperatureCelsius};%`)
+				at.temperatureCelsius === undefined
+					? undefined
+					: like(sql`${enteredTable.conditionKey} || ';'`, `T=${at.temperatureCelsius};%`)
 			)
 		)
 		.orderBy(asc(enteredTable.id));

@@ -95,7 +95,10 @@ export async function candidateFor(
 		isGathered && basis === 'characterized'
 			? input.limits
 					.get(asked.slot)
-					?.find(({ condition }) => condition.reverseVoltage === asked.bias)
+					?.find(
+						({ condition }) =>
+							asked.kind === 'characteristic' || condition.reverseVoltage === asked.bias
+					)
 			: (await computeLimits(db, product.id, [asked])).limits.get(asked.slot)?.[0];
 	if (row === undefined) return refuse(draftMessages.nothingComputed(place.label));
 	const decided = await decidedTexts(db, product.id, {

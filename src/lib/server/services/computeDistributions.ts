@@ -14,10 +14,17 @@ import { write } from '../db/write';
 import type { JobContext, JobHandler } from '../work/jobHandler';
 import { enqueueAssessment } from './assessReleases';
 import { conditionDistributions } from './conditionDistributions';
+import {
+	coefficientsDerived,
+	qualityDerived,
+	sweptDerived,
+	type SweptColumns
+} from './derivedDistributions';
+import { derivedWanted } from './derivedWanted';
 import { enqueueFits } from './fitSweepsJob';
 import { readBasis, type Basis } from './readBasis';
 import { readingDistribution } from './readingDistribution';
-import { readingSeries } from './readReadings';
+import { readingSeries, type ReadingSeriesKey } from './readReadings';
 import { readDevices, sweepConditions } from './readSweeps';
 import { storeDistributions } from './storeDistributions';
 import { templateBiases } from './templateBiases';
@@ -37,8 +44,8 @@ export interface ComputedDistributions {
 }
 
 /**
- * basis → devices → distributions of each sweep condition, then of each series of readings → stored
- * → complete
+ * basis → devices → distributions of each sweep condition, then of each series of readings, then of
+ * what is derived from several of them → stored → complete
  *
  * Works condition by condition. Beside the measured biases it computes those that the product's
  * templates and the payload name, interpolated within each sweep; a dense band only when asked. The
@@ -82,15 +89,28 @@ async function computeAll(
 		const { temperatureCelsius } = readConditionKey(conditionKey);
 		job.report({ done, total, words: limitMessages.computingAt(temperatureCelsius) });
 	};
+	const derived = await derivedWanted(db, productId);
+	const owned = { basis, devices };
+	// Of the other biases no column is held in memory beyond its own condition.
+	const kept = new Set([...derived.coefficients, ...resistanceBiases(readings)]);
+	const swept: SweptColumns[] = [];
 	let stored = 0;
 	for (const [done, sweepKey] of sweeps.entries()) {
 		reportAt(done, sweepKey);
-		const { measured, interpolated, joint } = await conditionDistributions(db, basis, devices, {
-			sweepKey,
-			asked: (grid) => [...named, ...(isBand ? denseBand(grid) : [])]
-		});
-		await storeDistributions(db, owner, [...measured, ...interpolated]);
-		stored += measured.length + interpolated.length;
+		const { measured, interpolated, joint, columns } = await conditionDistributions(
+			db,
+			basis,
+			devices,
+			{
+				sweepKey,
+				asked: (grid) => [...named, ...(isBand ? denseBand(grid) : [])]
+			}
+		);
+		const here = { sweepKey, columns };
+		const found = [...measured, ...interpolated, ...sweptDerived(owned, here, derived)];
+		swept.push({ ...here, columns: columns.filter(({ bias }) => kept.has(bias)) });
+		await storeDistributions(db, owner, found);
+		stored += found.length;
 		if (joint !== undefined) await storeJoint(db, owner, joint);
 	}
 	for (const [position, series] of readings.entries()) {
@@ -100,8 +120,21 @@ async function computeAll(
 		await storeDistributions(db, owner, [found]);
 		stored += 1;
 	}
+	const across = [
+		...coefficientsDerived(owned, swept, derived),
+		...(await qualityDerived(db, owned, swept, readings))
+	];
+	await storeDistributions(db, owner, across);
+	stored += across.length;
 	job.report({ done: total, total, words: limitMessages.computed(stored) });
 	return stored;
+}
+
+/** At which reverse biases a series resistance was read. */
+function resistanceBiases(readings: readonly ReadingSeriesKey[]): number[] {
+	return readings
+		.filter(({ characteristic }) => characteristic === 'r_s')
+		.flatMap(({ conditionKey }) => readConditionKey(conditionKey).reverseVoltage ?? []);
 }
 
 async function storeJoint(

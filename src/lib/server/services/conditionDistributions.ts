@@ -26,6 +26,8 @@ export interface ConditionDistributions {
 	/** At the other biases asked for that lie between measured ones. */
 	readonly interpolated: readonly Distribution[];
 	readonly joint: JointDistribution | undefined;
+	/** The capacitances of all devices at every measured bias. */
+	readonly columns: readonly BiasColumn[];
 }
 
 /**
@@ -64,7 +66,7 @@ export async function conditionDistributions(
 		measured,
 		biases
 	});
-	return { measured, interpolated, joint };
+	return { measured, interpolated, joint, columns };
 }
 
 /**

@@ -7,7 +7,8 @@ import type { Connection } from '../db/database';
 import type { FoundDraft } from '../db/findDraft';
 import { findPolicyVersion } from '../db/findPolicies';
 import { capacitanceTable } from './capacitanceTable';
-import { limitWantedAt, type LimitWanted } from './limitWantedAt';
+import { characteristicLimits } from './characteristicLimits';
+import { limitWantedAt, type CapacitanceWanted, type LimitWanted } from './limitWantedAt';
 
 export interface DraftLimits {
 	/** By slot, in the order asked. */
@@ -27,14 +28,18 @@ export async function draftLimits(
 	return computeLimits(db, product, limitsWanted(draft));
 }
 
-/** The same for numbers asked one by one. Each table of one condition, policy and basis is read once. */
+/**
+ * The same for numbers asked one by one. Each table of one condition, policy and basis is read once;
+ * a characteristic of which nothing is stored has no row.
+ */
 export async function computeLimits(
 	db: Connection,
 	product: number,
 	wanted: readonly LimitWanted[]
 ): Promise<DraftLimits> {
 	const limits = new Map<string, LimitRow[]>();
-	for (const group of grouped(wanted)) {
+	const capacitances = wanted.filter((one) => one.kind === 'capacitance');
+	for (const group of grouped(capacitances)) {
 		const [{ temperatureCelsius, frequency, policyVersion, declaredBasis }] = group;
 		const table = await capacitanceTable(db, {
 			product,
@@ -49,6 +54,12 @@ export async function computeLimits(
 			const row = table.rows.find(({ condition }) => condition.reverseVoltage === bias);
 			if (row !== undefined) limits.set(slot, [...(limits.get(slot) ?? []), row]);
 		}
+	}
+	for (const one of wanted) {
+		if (one.kind !== 'characteristic') continue;
+		const { slot, condition, ...asked } = one;
+		const found = await characteristicLimits(db, { product, ...asked, conditions: [condition] });
+		if (!('status' in found)) limits.set(slot, [...found.rows]);
 	}
 	return { limits, policies: await policiesOf(db, wanted) };
 }
@@ -79,7 +90,7 @@ function limitsWanted({
 
 function limitAddresses({ sections }: Template): LimitAddress[] {
 	return sections.flatMap((section): LimitAddress[] => {
-		if (section.kind === 'characteristics')
+		if (section.kind === 'characteristics' || section.kind === 'thermal')
 			return section.slots.map(({ slot }) => ({ slot, bias: null }));
 		if (section.kind === 'capacitance-table')
 			return section.biases.map((bias) => ({ slot: section.slot, bias }));
@@ -93,9 +104,9 @@ function heldAt(held: Binding | undefined, bias: number | null): LimitBinding | 
 	return filling?.kind === 'limit' ? filling : undefined;
 }
 
-type NonEmpty = [LimitWanted, ...LimitWanted[]];
+type NonEmpty = [CapacitanceWanted, ...CapacitanceWanted[]];
 
-function grouped(wanted: readonly LimitWanted[]): NonEmpty[] {
+function grouped(wanted: readonly CapacitanceWanted[]): NonEmpty[] {
 	const groups = new Map<string, NonEmpty>();
 	for (const one of wanted) {
 		const { temperatureCelsius, frequency, policyVersion, declaredBasis } = one;

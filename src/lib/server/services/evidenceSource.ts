@@ -8,6 +8,7 @@ import {
 	type DeviceValue,
 	type PackedBlock
 } from '$lib/core/review/secondRoute/readColumn';
+import { readRatio } from '$lib/core/review/secondRoute/readRatio';
 import { readReadings } from '$lib/core/review/secondRoute/readReadings';
 import type { Database } from '../db/database';
 import {
@@ -110,6 +111,34 @@ export class EvidenceSource {
 			devices,
 			independentLots: new Set(devices.map(({ waferLot }) => waferLot)).size,
 			uncertainty: await this.#uncertainty(new Set(blocks.map(({ set }) => set))),
+			censored: 0
+		};
+	}
+
+	/**
+	 * The ratio of each device's capacitances at two biases, left out as above. Its uncertainty is
+	 * that of both together.
+	 */
+	async ratiosAt(
+		at: SweepCondition,
+		biases: readonly [low: number, high: number]
+	): Promise<MeasuredDevices> {
+		const key = sweepKey(at);
+		const blocks = (await this.#blocksAt(key)).filter(({ grid }) =>
+			biases.some((bias) => grid.includes(bias))
+		);
+		this.#leftOut ??= await this.#readLeftOut();
+		const leftOut = this.#leftOut;
+		const devices = readRatio(
+			blocks,
+			biases,
+			(set, row) => leftOut.has(`${set}/${row}/${key}`),
+			await this.#waferLots()
+		);
+		return {
+			devices,
+			independentLots: new Set(devices.map(({ waferLot }) => waferLot)).size,
+			uncertainty: 2 * (await this.#uncertainty(new Set(blocks.map(({ set }) => set)))),
 			censored: 0
 		};
 	}

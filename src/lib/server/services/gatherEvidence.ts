@@ -1,6 +1,6 @@
 import { findCharacteristic } from '$lib/core/characteristics/catalogue';
 import type { DocumentRow } from '$lib/core/datasheet/documentRows';
-import { memoMissing, memoUnreadable } from '$lib/core/messages/verification';
+import { derivedHasOneRoute, memoMissing, memoUnreadable } from '$lib/core/messages/verification';
 import { computeEvidence } from '$lib/core/review/secondRoute/computeEvidence';
 import type { SheetRow } from '$lib/core/review/sheetRows';
 import type { ComputedEvidence } from '$lib/core/review/verificationEvidence';
@@ -26,10 +26,15 @@ export async function gatherEvidence(
 	const { characteristic, conditionKey } = stored.row;
 	const of = findCharacteristic(characteristic);
 	const at = conditionOf(entry, stored.row.condition);
+	const { secondReverseVoltage } = stored.row.condition;
+	if (of?.measuredAs === 'derived' && secondReverseVoltage === undefined)
+		return { status: 'refused', reason: derivedHasOneRoute(characteristic) };
 	const measured =
 		of?.measuredAs === 'reading'
 			? await source.readingsOf(characteristic, conditionKey)
-			: await source.devicesAt(at, at.reverseVoltage);
+			: secondReverseVoltage === undefined
+				? await source.devicesAt(at, at.reverseVoltage)
+				: await source.ratiosAt(at, [at.reverseVoltage, secondReverseVoltage]);
 	return computeEvidence({
 		printed: entry.row,
 		memo: stored.row,

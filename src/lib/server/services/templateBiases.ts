@@ -11,6 +11,11 @@ import { CAPACITANCE } from './readBasis';
  * of the newest templates of its class, from which the next draft is opened. In V, each once.
  */
 export async function templateBiases(db: Database, productId: number): Promise<number[]> {
+	return [...new Set((await templatesOf(db, productId)).flatMap(biasesOf))];
+}
+
+/** The template of a product's draft, and the newest of its class. */
+export async function templatesOf(db: Database, productId: number): Promise<Template[]> {
 	const [owner] = await db.select().from(product).where(eq(product.id, productId)).limit(1);
 	const [drafted] = await db
 		.select({ json: templateVersion.json })
@@ -21,10 +26,7 @@ export async function templateBiases(db: Database, productId: number): Promise<n
 	const newest = (await listTemplates(db))
 		.map(({ template }) => template)
 		.filter(({ productClass }) => productClass === owner?.productClass);
-	const templates = drafted
-		? [...newest, parseTemplate(drafted.json, 'the template of the draft')]
-		: newest;
-	return [...new Set(templates.flatMap(biasesOf))];
+	return drafted ? [...newest, parseTemplate(drafted.json, 'the template of the draft')] : newest;
 }
 
 function biasesOf({ sections }: Template): number[] {
