@@ -6,13 +6,19 @@ import { normalQuantile } from '$lib/core/stats/normalQuantile';
 import type { LimitPolicy } from '$lib/core/limits/policy';
 import type { OpenDatabase } from '$lib/server/db/client';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
-import { audit, limitOverride } from '$lib/server/db/schema';
+import { audit, limitOverride, lot } from '$lib/server/db/schema';
+import { write } from '$lib/server/db/write';
+import { bindSlot } from '$lib/server/services/bindSlot';
+import { changeDraftSettings } from '$lib/server/services/changeDraftSettings';
 import { computeDistributions } from '$lib/server/services/computeDistributions';
 import { decidedTexts } from '$lib/server/services/decidedTexts';
 import { decideLimit, takeBackDecision } from '$lib/server/services/decideLimit';
+import { ensureTemplates } from '$lib/server/services/ensureTemplates';
 import { limitsScreen } from '$lib/server/services/limitsScreen';
+import { openDraft } from '$lib/server/services/openDraft';
 import { savePolicy } from '$lib/server/services/savePolicy';
 import { testLimitsCsv } from '$lib/server/services/testLimitsCsv';
+import { viewDraft } from '$lib/server/services/viewDraft';
 import { ENGINEER, insertAcceptedSet, insertProduct } from '../factories/acceptedSet';
 import { openTestDatabase } from '../factories/testDatabase';
 import { unreachableStorage } from '../factories/unreachableStorage';
@@ -41,20 +47,17 @@ let opened: OpenDatabase;
 let product: { id: number; basisHash: string };
 let policyVersion = 0;
 
-beforeAll(async () => {
-	opened = await openTestDatabase();
+/** The case as a product of its own; with a mother lot, all devices come from one wafer lot. */
+async function insertCase(partNumber: string, sha256: string, motherLot?: string) {
 	const { db } = opened;
-	const id = await insertProduct(db, PART);
+	const id = await insertProduct(db, partNumber);
+	const ofLot = (of: (j: number) => number) => Array.from({ length: PER_LOT }, (_, j) => of(j));
 	await insertAcceptedSet(db, {
 		product: id,
-		sha256: 'a'.repeat(64),
+		sha256,
 		uncertainty: 0,
 		devices: MEDIANS.flatMap((_, lot) =>
-			Array.from({ length: PER_LOT }, (__, j) => ({
-				lot: `LK26-0${lot + 11}`,
-				wafer: '01',
-				name: String(j + 1)
-			}))
+			ofLot((j) => j).map((j) => ({ lot: `LK26-0${lot + 11}`, wafer: '01', name: String(j + 1) }))
 		),
 		biases: [4],
 		frequency: 1e6,
@@ -63,23 +66,28 @@ beforeAll(async () => {
 				25,
 				Float64Array.from(
 					MEDIANS.flatMap((median) =>
-						Array.from(
-							{ length: PER_LOT },
-							(_, j) => median * Math.exp(0.015 * normalQuantile((j + 0.5) / PER_LOT))
-						)
+						ofLot((j) => median * Math.exp(0.015 * normalQuantile((j + 0.5) / PER_LOT)))
 					)
 				)
 			]
 		])
 	});
+	if (motherLot !== undefined) {
+		await write(db, (tx) => tx.update(lot).set({ waferLot: motherLot }).where(eq(lot.product, id)));
+	}
 	await computeDistributions(
 		{ db, storage: unreachableStorage },
 		{ product: id },
 		{ id: 1, attempt: 1, report: () => undefined, isCurrent: () => Promise.resolve(true) }
 	);
-	const found = await findProductByPartNumber(db, PART);
-	product = { id, basisHash: found?.basisHash ?? '' };
-	const saved = await savePolicy({ db }, { rules: RULES, by: ENGINEER });
+	const found = await findProductByPartNumber(db, partNumber);
+	return { id, basisHash: found?.basisHash ?? '' };
+}
+
+beforeAll(async () => {
+	opened = await openTestDatabase();
+	product = await insertCase(PART, 'a'.repeat(64));
+	const saved = await savePolicy(opened, { rules: RULES, by: ENGINEER });
 	policyVersion = saved.status === 'saved' ? saved.id : 0;
 });
 afterAll(() => opened.close());
@@ -237,12 +245,49 @@ describe('printed 14.2 and 15.8 pF, tested on every device', () => {
 			status: 'refused',
 			message: limitsScreenMessages.nothingToTakeBack()
 		});
-		const kept = await opened.db.select().from(limitOverride);
+		const kept = await opened.db
+			.select()
+			.from(limitOverride)
+			.where(eq(limitOverride.product, product.id));
 		expect(kept.map((of) => of.decision === null)).toEqual([false, false, true]);
 		const said = await opened.db.select().from(audit).where(eq(audit.action, 'limit.decide'));
 		expect(said.map(({ subject }) => subject)).toEqual(
 			Array.from({ length: 2 }, () => `${PART} C_tot at ${CONDITION}`)
 		);
+	});
+});
+
+describe('declared tested, all devices of one mother wafer lot', () => {
+	it('is refused for production, and fine for a preliminary sheet', async () => {
+		const { db } = opened;
+		const me = { partNumber: 'LKT-1131', by: ENGINEER };
+		await insertCase(me.partNumber, 'b'.repeat(64), 'LK26-M1');
+		// The machine asks for three lots and prints nothing; the decision prints 14.2 and 15.8.
+		expect(await decideLimit(opened, { ...at(), ...decision, ...me })).toEqual({
+			status: 'decided'
+		});
+		await ensureTemplates({ db });
+		const terms = { policyVersion, status: 'production' as const };
+		await openDraft(opened, { ...me, ...terms, template: 'tuning' });
+		const place = 'capacitance.25c.VR=4';
+		const bound = await bindSlot(opened, {
+			...me,
+			place,
+			basis: 'tested',
+			basisReason: 'Final test at 4 V.'
+		});
+		expect(bound).toMatchObject({ prints: { minimum: '14.2', maximum: '15.8' } });
+
+		const problemsAt = async () => {
+			const view = await viewDraft(db, me.partNumber);
+			if (view.status !== 'open') throw new Error('the draft is open');
+			const { slots, problems } = view.resolved;
+			expect(slots.find(({ id }) => id === place)?.state).toBe('overridden');
+			return problems.filter((of) => of.place === place).map(({ message }) => message);
+		};
+		expect(await problemsAt()).toEqual([draftMessages.tooFewLots(3, 1, RULES.name)]);
+		await changeDraftSettings(opened, { ...me, ...terms, status: 'preliminary' });
+		expect(await problemsAt()).toEqual([]);
 	});
 });
 
