@@ -1,4 +1,3 @@
-import { mapNumbers } from '../stats/mapNumbers';
 import { mean as meanOf } from '../stats/mean';
 import { quantile } from '../stats/quantile';
 import { skewness } from '../stats/skewness';
@@ -10,7 +9,7 @@ import { extremesOf } from './extremes';
 import { groupMembers, type Members, type TransformedMembers } from './groupMembers';
 import type { GroupName } from './indexDevices';
 import type { Censoring, Distribution, DistributionSummary, Group, Transform } from './summary';
-import { TRANSFORMS } from './transforms';
+import { transformNumbers } from './transformNumbers';
 import { withinLotNormality } from './withinLotNormality';
 
 /** Where the stored quantiles lie: the extremes, the tails a limit speaks of, and every 5 %. */
@@ -66,13 +65,15 @@ export function computeDistribution(input: DistributionInput): Distribution | un
 	const lowest = sorted[0] ?? Number.NaN;
 	if (transform !== 'identity' && lowest <= 0) throw new TransformDomainError(transform, lowest);
 
-	const { apply } = TRANSFORMS[transform];
 	const observed = observedOf(sorted, censoring);
 	const all = groupMembers(bounded, input.groupOf, input.groups);
 	const exact = censoring ? all.flatMap((of) => observedMembers(of, censoring)) : all;
-	const members = exact.map((of) => ({ ...of, transformed: mapNumbers(of.sorted, apply) }));
+	const members = exact.map((of) => ({
+		...of,
+		transformed: transformNumbers(of.sorted, transform)
+	}));
 	const groups = members.map(sumsOf);
-	const transformed = mapNumbers(observed.length === 0 ? sorted : observed, apply);
+	const transformed = transformNumbers(observed.length === 0 ? sorted : observed, transform);
 	const mean = meanOf(transformed);
 	const sumOfSquares = sum(
 		groups.map((of) => of.sumOfSquares + of.sampleSize * (of.mean - mean) ** 2)

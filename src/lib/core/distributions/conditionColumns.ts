@@ -1,4 +1,3 @@
-import { mapNumbers } from '../stats/mapNumbers';
 import type { DeviceIndex } from './indexDevices';
 
 /** A packed block, opened: one matrix of devices × biases at one temperature and frequency. */
@@ -71,7 +70,7 @@ export class ConditionColumns {
 			.sort(([a], [b]) => a - b)
 			.map(([bias, { sums, counts, sets }]) => ({
 				bias,
-				values: mapNumbers(sums, (sum, device) => sum / counts[device]!),
+				values: averages(sums, counts),
 				sets: [...sets].sort((a, b) => a - b)
 			}));
 	}
@@ -88,4 +87,12 @@ export class ConditionColumns {
 		}
 		return column;
 	}
+}
+
+/** NaN for a device without a value. */
+function averages(sums: Float64Array, counts: Uint16Array): Float64Array {
+	const means = new Float64Array(sums.length);
+	for (let device = 0; device < sums.length; device++)
+		means[device] = sums[device]! / counts[device]!;
+	return means;
 }

@@ -5,8 +5,12 @@ export const EXTREMES = 512;
 
 /** The outermost devices of each side. @param sorted ascending */
 export function extremesOf(sorted: Float64Array): Extremes {
-	return {
-		lowest: [...sorted.subarray(0, EXTREMES)],
-		highest: [...sorted.subarray(Math.max(0, sorted.length - EXTREMES))].reverse()
-	};
+	const count = Math.min(EXTREMES, sorted.length);
+	const lowest = new Array<number>(count);
+	const highest = new Array<number>(count);
+	for (let i = 0; i < count; i++) {
+		lowest[i] = sorted[i]!;
+		highest[i] = sorted[sorted.length - 1 - i]!;
+	}
+	return { lowest, highest };
 }

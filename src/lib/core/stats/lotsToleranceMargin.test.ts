@@ -157,11 +157,10 @@ it('keeps just the confidence asked for, also far out', () => {
 				const strata = nestedDesign(lots, ofLots, ofWafers, 1);
 				const margin = lotsToleranceMargin(strata, { content, confidence });
 				const halfWidth = lotsToleranceHalfWidth(strata, { content, confidence });
-				expect(lotsMarginConfidence(strata, content)(margin)).toBeCloseTo(confidence, 6);
+				const confidenceOf = lotsMarginConfidence(strata, content);
+				expect(confidenceOf(margin)).toBeCloseTo(confidence, 6);
 				expect(lotsHalfWidthConfidence(strata, content)(halfWidth)).toBeCloseTo(confidence, 6);
-				expect(lotsMarginConfidence(strata, content)(margin * 1.01)).toBeGreaterThan(
-					lotsMarginConfidence(strata, content)(margin * 0.99)
-				);
+				expect(confidenceOf(margin * 1.01)).toBeGreaterThan(confidenceOf(margin * 0.99));
 			}
 		),
 		{ numRuns: 40 }

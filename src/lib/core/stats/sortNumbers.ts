@@ -1,62 +1,61 @@
-/** So many numbers a bucket are put in order by insertion; a fuller one by the language's own sort. */
-const CROWDED = 24;
+/** Steps an insertion may cost a number; beyond, the language's own sort is as quick. */
+const MOST_STEPS = 16;
 
 /**
  * `values.toSorted()` in a third of its time where the numbers spread as measured ones do: each goes
- * into one of as many equal intervals as there are numbers, and an interval holds few. Where most
- * fall into one of them, because of an outlier far away, it takes as long as the language's own sort.
- * NaN comes last, −0 before 0.
+ * into one of as many equal intervals as there are numbers, so that few are left to be exchanged.
+ * Where they crowd in a few of the intervals, because of an outlier far away or of coarse steps, and
+ * where only bits tell the order (NaN, −0 and 0), the language's own sort does the work.
  */
 export function sortNumbers(values: Float64Array): Float64Array {
 	const size = values.length;
-	if (size <= CROWDED) return values.slice().sort();
 	let [lowest, highest] = [Infinity, -Infinity];
 	for (let i = 0; i < size; i++) {
 		const value = values[i]!;
-		if (Number.isNaN(value)) return values.slice().sort();
+		if (Number.isNaN(value) || value === 0) return values.slice().sort();
 		if (value < lowest) lowest = value;
 		if (value > highest) highest = value;
 	}
+	// Without a finite spread the place of every number is 0: one crowded interval.
 	const perUnit = (size - 1) / (highest - lowest);
+	const ends = emptyCounts(size);
+	for (let i = 0; i < size; i++) ends[((values[i]! - lowest) * perUnit) | 0]!++;
+	let [end, steps] = [0, 0];
+	for (let interval = 0; interval < size; interval++) {
+		const count = ends[interval]!;
+		steps += count * count;
+		end += count;
+		ends[interval] = end;
+	}
+	if (steps > MOST_STEPS * size) return values.slice().sort();
 
-	// Without a finite spread, every place is 0: one crowded bucket.
-	const starts = emptyBuckets(size + 1);
-	for (let i = 0; i < size; i++) starts[((values[i]! - lowest) * perUnit) | 0]!++;
-	for (let bucket = 1; bucket <= size; bucket++) starts[bucket]! += starts[bucket - 1]!;
 	const sorted = new Float64Array(size);
-	for (let i = size - 1; i >= 0; i--) {
+	for (let i = 0; i < size; i++) {
 		const value = values[i]!;
-		sorted[--starts[((value - lowest) * perUnit) | 0]!] = value;
+		sorted[--ends[((value - lowest) * perUnit) | 0]!] = value;
 	}
-
-	/** The comparison of an insertion can't tell −0 from 0. */
-	const ofZero = lowest <= 0 && highest >= 0 ? (-lowest * perUnit) | 0 : -1;
-	for (let bucket = 0; bucket < size; bucket++) {
-		const [from, to] = [starts[bucket]!, starts[bucket + 1]!];
-		if (to - from < 2) continue;
-		if (to - from > CROWDED || bucket === ofZero) sorted.subarray(from, to).sort();
-		else insert(sorted, from, to);
-	}
+	insertEach(sorted);
 	return sorted;
 }
 
 /** Kept from one sample to the next, as long as the largest of them needed. */
-let buckets = new Int32Array(0);
+let kept = new Int32Array(0);
 
-function emptyBuckets(count: number): Int32Array {
-	if (buckets.length < count) buckets = new Int32Array(count);
-	else buckets.fill(0, 0, count);
-	return buckets;
+function emptyCounts(size: number): Int32Array {
+	if (kept.length < size) kept = new Int32Array(size);
+	else kept.fill(0, 0, size);
+	return kept;
 }
 
-function insert(values: Float64Array, from: number, to: number): void {
-	for (let i = from + 1; i < to; i++) {
+/** Sorting by insertion, quick where every number is near its place already. */
+function insertEach(values: Float64Array): void {
+	for (let i = 1; i < values.length; i++) {
 		const value = values[i]!;
-		let at = i - 1;
-		while (at >= from && values[at]! > value) {
-			values[at + 1] = values[at]!;
+		let at = i;
+		while (at > 0 && values[at - 1]! > value) {
+			values[at] = values[at - 1]!;
 			at--;
 		}
-		values[at + 1] = value;
+		if (at < i) values[at] = value;
 	}
 }
