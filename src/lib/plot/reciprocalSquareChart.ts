@@ -65,7 +65,15 @@ function biasAxis({ median, line }: Pick<ReciprocalSquareData, 'median' | 'line'
 	if (!Number.isFinite(lowest)) throw new RangeError('a 1/C² plot requires a median sweep');
 	const meets = line === null ? lowest : -line.intercept / line.slope;
 	// A line that meets zero further out than the sweep is wide would squeeze the sweep.
-	return linearAxis(Math.max(Math.min(lowest, meets), lowest - (highest - lowest)), highest);
+	const from = Math.max(Math.min(lowest, meets), lowest - (highest - lowest));
+	const axis = linearAxis(from, highest);
+	// Ticks stay round; the axis itself ends where there is nothing more to see.
+	const domain = [from - (highest - from) * 0.02, highest] as const;
+	return {
+		...axis,
+		domain,
+		ticks: axis.ticks.filter((tick) => tick >= domain[0] && tick <= highest)
+	};
 }
 
 /** 1/C² of the median sweep against bias, with the line through the biases of a window. */
