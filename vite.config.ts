@@ -15,6 +15,8 @@ export default defineConfig({
 				extends: true,
 				test: {
 					name: 'unit',
+					// No test changes what another one imports; a module is read once a worker, not once a file.
+					isolate: false,
 					include: ['src/**/*.test.ts', 'tests/**/*.test.ts'],
 					exclude: SERVED
 				}
