@@ -1,4 +1,5 @@
 import { BASES, BASIS_MARKS, type Basis } from '../limits/basis';
+import { DEFAULT_K } from '../limits/methods/sigma';
 import type { LimitPolicy } from '../limits/policy';
 import { sheetTexts } from '../messages/datasheet';
 import type { DatasheetDocument } from './document';
@@ -55,11 +56,14 @@ function characterizedWords(rows: readonly Place[]): string {
 }
 
 function promise(rules: LimitPolicy): string {
-	if (rules.method === 'sigma') return sheetTexts.houseRule(rules.k ?? 0);
+	if (rules.method === 'sigma') return sheetTexts.houseRule(rules.k ?? DEFAULT_K);
 	const [content, confidence] = [percent(rules.content), percent(rules.confidence)];
-	return rules.tails === 'both'
-		? sheetTexts.bothLimits(content, confidence)
-		: sheetTexts.eachLimit(content, confidence);
+	const devices = rules.method === 'lots' ? sheetTexts.futureDevices() : sheetTexts.devices();
+	const text =
+		rules.tails === 'both'
+			? sheetTexts.bothLimits(content, confidence, devices)
+			: sheetTexts.eachLimit(content, confidence, devices);
+	return rules.span === 'whole-curve' ? `${text}; ${sheetTexts.wholeCurve()}` : text;
 }
 
 /** `300`, or `292 to 300`. */

@@ -122,7 +122,7 @@ describe('a complete production draft', () => {
 			{
 				basis: 'characterized',
 				mark: 'C',
-				text: `characterized on 300 devices of 3 independent lots: ${sheetTexts.eachLimit('95\u00a0%', '95\u00a0%')}`
+				text: `characterized on 300 devices of 3 independent lots: ${sheetTexts.eachLimit('95\u00a0%', '95\u00a0%', 'devices')}`
 			}
 		]);
 		expect(document.footnotes).toEqual([
@@ -132,6 +132,14 @@ describe('a complete production draft', () => {
 			sheetTexts.deviations(),
 			sheetTexts.ratio('28')
 		]);
+	});
+
+	it('promises future lots where the policy does', () => {
+		const policies = new Map([[1, samplePolicy(1, { method: 'lots', tails: 'both' })]]);
+		const ofLots = resolve({ ...completeDraft(), policies }).document;
+		expect(ofLots?.basisNotes[0]?.text).toContain(
+			sheetTexts.bothLimits('95\u00a0%', '95\u00a0%', sheetTexts.futureDevices())
+		);
 	});
 
 	it('leaves open and struck-out places off the sheet, and shows open ones on the proof', () => {

@@ -119,9 +119,12 @@ export const sheetTexts = {
 	correlation: () => 'guaranteed by correlation with a characteristic that is tested',
 	typical: () => 'typical, not guaranteed',
 	characterized: (devices: string, lots: string) => `characterized on ${devices} of ${lots}`,
-	eachLimit: (content: string, confidence: string) =>
-		`with ${confidence} confidence at least ${content} of devices lie above the minimum, and at least ${content} below the maximum; each limit on its own`,
-	bothLimits: (content: string, confidence: string) =>
-		`with ${confidence} confidence at least ${content} of devices lie between minimum and maximum`,
+	devices: () => 'devices',
+	futureDevices: () => 'devices of future lots',
+	eachLimit: (content: string, confidence: string, devices: string) =>
+		`with ${confidence} confidence at least ${content} of ${devices} lie above the minimum, and at least ${content} below the maximum; each limit on its own`,
+	bothLimits: (content: string, confidence: string, devices: string) =>
+		`with ${confidence} confidence at least ${content} of ${devices} lie between minimum and maximum`,
+	wholeCurve: () => 'along the entire curve',
 	houseRule: (k: number) => `limits at mean ± ${k} σ, behind a test of every device`
 };
