@@ -10,20 +10,20 @@ import type { QuadratureRule } from './gaussLegendre';
 export function logChiSquareRule(degrees: number, step: number): QuadratureRule {
 	const spread = Math.sqrt(2 / degrees + 1 / (degrees * degrees));
 	const prefactor = gammaPrefactor(degrees / 2);
-	const weightAt = (u: number) => (step * spread * degrees * prefactor((degrees * u) / 2)) / 2;
-	const reach = (direction: number) => {
-		let count = 0;
-		while (weightAt(Math.exp(direction * (count + 1) * step * spread)) > 1e-11) count++;
-		return count;
+	/** Outwards until they no longer count. */
+	const towards = (direction: 1 | -1, first: number) => {
+		const [nodes, weights]: [number[], number[]] = [[], []];
+		for (let at = first; ; at++) {
+			const u = Math.exp(direction * at * step * spread);
+			const weight = (step * spread * degrees * prefactor((degrees * u) / 2)) / 2;
+			if (at > 0 && !(weight > 1e-11)) return { nodes, weights };
+			nodes.push(degrees * u);
+			weights.push(weight);
+		}
 	};
-	const below = reach(-1);
-	const count = below + reach(1) + 1;
-	const nodes = new Float64Array(count);
-	const weights = new Float64Array(count);
-	for (let i = 0; i < count; i++) {
-		const u = Math.exp((i - below) * step * spread);
-		nodes[i] = degrees * u;
-		weights[i] = weightAt(u);
-	}
-	return { nodes, weights };
+	const [below, above] = [towards(-1, 1), towards(1, 0)];
+	return {
+		nodes: Float64Array.from([...below.nodes.reverse(), ...above.nodes]),
+		weights: Float64Array.from([...below.weights.reverse(), ...above.weights])
+	};
 }

@@ -138,6 +138,8 @@ it.each([
 	}
 );
 
+// A margin that solves anything else misses the sixth digit in nearly every run, so twenty are enough;
+// a third of the variances drawn is 0 and a third out of scale, and those are the slow ones
 it('keeps just the confidence asked for, also far out', () => {
 	const variance = fc.oneof(
 		fc.constant(0),
@@ -163,7 +165,7 @@ it('keeps just the confidence asked for, also far out', () => {
 				expect(confidenceOf(margin * 1.01)).toBeGreaterThan(confidenceOf(margin * 0.99));
 			}
 		),
-		{ numRuns: 40 }
+		{ numRuns: 20 }
 	);
 });
 
