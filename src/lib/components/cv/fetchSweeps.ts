@@ -1,7 +1,8 @@
 import type { BandPoint } from '$lib/plot/bandChart';
 import type { DeviceSweep } from '$lib/plot/capacitanceChart';
+import { unpackSweeps, type PackedSweeps } from './packSweeps';
 
-/** What `cv/sweeps.json` answers: our own endpoint, so its shape is taken as it is declared. */
+/** The sweeps over a band, and of how many they are a sample. */
 export interface SweepSample {
 	readonly total: number;
 	readonly outside: number;
@@ -13,7 +14,10 @@ export interface Band {
 	readonly points: readonly BandPoint[];
 }
 
-const isSample = (value: unknown): value is SweepSample =>
+/** What `cv/sweeps.json` answers: our own endpoint, so its shape is taken as it is declared. */
+type PackedSample = Omit<SweepSample, 'sweeps'> & PackedSweeps;
+
+const isSample = (value: unknown): value is PackedSample =>
 	typeof value === 'object' && value !== null && 'sweeps' in value && Array.isArray(value.sweeps);
 const isBand = (value: unknown): value is Band =>
 	typeof value === 'object' && value !== null && 'points' in value && Array.isArray(value.points);
@@ -24,7 +28,7 @@ export async function fetchSweeps(
 	signal: AbortSignal
 ): Promise<SweepSample | undefined> {
 	const body = await fetchJson(address, signal);
-	return isSample(body) ? body : undefined;
+	return isSample(body) ? { ...body, sweeps: unpackSweeps(body) } : undefined;
 }
 
 /** The band at and between the measured biases; `undefined` when it can't be had. */

@@ -1,4 +1,5 @@
 import { json } from '@sveltejs/kit';
+import { packSweeps } from '$lib/components/cv/packSweeps';
 import { limitMessages } from '$lib/core/messages/limits';
 import { requirePermission } from '$lib/server/auth/requirePermission';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
@@ -29,5 +30,6 @@ export const GET: RequestHandler = async ({ locals, params, url }) => {
 			])
 		)
 	});
-	return json({ unit: curve.unit, ...sample });
+	const { total, outside, sweeps } = sample;
+	return json({ unit: curve.unit, total, outside, ...packSweeps(sweeps) });
 };
