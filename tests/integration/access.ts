@@ -61,6 +61,8 @@ export const ACCESS: Readonly<Record<string, Access>> = {
 	'/products/[partNumber]/edit action addRow': 'product.edit',
 	'/products/[partNumber]/edit action removeRow': 'product.edit',
 	'/products/[partNumber]/coverage load': 'limit.read',
+	'/products/[partNumber]/characteristics load': 'limit.read',
+	'/products/[partNumber]/characteristics/table.csv GET': 'limit.read',
 	'/products/[partNumber]/cv load': 'limit.read',
 	'/products/[partNumber]/cv/band.json GET': 'limit.read',
 	'/products/[partNumber]/cv/model.lib GET': 'limit.read',

@@ -41,6 +41,17 @@ export const CHARACTERISTICS = [
 		fallsWithReverseVoltage: true
 	},
 	{
+		key: 'I',
+		symbol: { quantity: 'I' },
+		name: 'Current',
+		unit: 'A',
+		axes: ['reverseVoltage'],
+		measuredAs: 'sweep',
+		promised: [],
+		transform: 'identity',
+		fallsWithReverseVoltage: false
+	},
+	{
 		key: 'V_F',
 		symbol: { quantity: 'V', subscript: 'F' },
 		name: 'Forward voltage',

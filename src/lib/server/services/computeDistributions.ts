@@ -14,6 +14,7 @@ import { write } from '../db/write';
 import type { JobContext, JobHandler } from '../work/jobHandler';
 import { enqueueAssessment } from './assessReleases';
 import { conditionDistributions } from './conditionDistributions';
+import { currentDistributions } from './currentDistributions';
 import {
 	coefficientsDerived,
 	qualityDerived,
@@ -44,8 +45,8 @@ export interface ComputedDistributions {
 }
 
 /**
- * basis → devices → distributions of each sweep condition, then of each series of readings, then of
- * what is derived from several of them → stored → complete
+ * basis → devices → distributions of each sweep condition, then of each series of readings and each
+ * temperature of currents, then of what is derived from several of them → stored → complete
  *
  * Works condition by condition. Beside the measured biases it computes those that the product's
  * templates and the payload name, interpolated within each sweep; a dense band only when asked. The
@@ -83,8 +84,9 @@ async function computeAll(
 	const devices = indexDevices(await readDevices(db, sets), CHUNK, basis.inputs.waferLots);
 	const sweeps = await sweepConditions(db, sets);
 	const readings = await readingSeries(db, sets);
+	const currents = await sweepConditions(db, sets, 'current');
 	const named = [...biases, ...(await templateBiases(db, productId))];
-	const total = sweeps.length + readings.length;
+	const total = sweeps.length + readings.length + currents.length;
 	const reportAt = (done: number, conditionKey: string) => {
 		const { temperatureCelsius } = readConditionKey(conditionKey);
 		job.report({ done, total, words: limitMessages.computingAt(temperatureCelsius) });
@@ -119,6 +121,12 @@ async function computeAll(
 		if (found === undefined) continue;
 		await storeDistributions(db, owner, [found]);
 		stored += 1;
+	}
+	for (const [position, currentKey] of currents.entries()) {
+		reportAt(sweeps.length + readings.length + position, currentKey);
+		const found = await currentDistributions(db, basis, devices, currentKey);
+		await storeDistributions(db, owner, found);
+		stored += found.length;
 	}
 	const across = [
 		...coefficientsDerived(owned, swept, derived),
