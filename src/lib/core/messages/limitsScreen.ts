@@ -19,6 +19,7 @@ export const limitsScreenMessages = {
 		readonly looser: number;
 		readonly gained: number;
 		readonly lost: number;
+		readonly same: number;
 	}) => {
 		const said = [
 			...(of.tighter > 0 ? [`${plural(of.tighter, 'limit tightens', 'limits tighten')}`] : []),
@@ -28,7 +29,8 @@ export const limitsScreenMessages = {
 				? [`${plural(of.lost, 'limit is', 'limits are')} refused or not promised`]
 				: [])
 		];
-		return said.length === 0 ? 'No printed limit changes.' : `${said.join(', ')}; the others stay.`;
+		if (said.length === 0) return 'No printed limit changes.';
+		return `${said.join(', ')}${of.same > 0 ? '; the others stay' : ''}.`;
 	},
 	needsDevices: (count: number) => `${plural(count, 'device')} a side would be needed.`,
 	withoutLots: (left: readonly string[], lots: number, devices: number) =>

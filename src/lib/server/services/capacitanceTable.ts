@@ -107,15 +107,21 @@ export async function capacitanceTable(
 	const biases =
 		request.biases ?? atFrequency.flatMap(({ condition }) => condition.reverseVoltage ?? []);
 	const at = { temperatureCelsius, ...(frequency === undefined ? {} : { frequency }) };
-	const between = await interpolateNow(db, { ...scope, at, biases });
+	// Measured biases are all there: nothing is looked for between them, nor read again.
+	const isUnderway =
+		request.biases !== undefined &&
+		(await interpolateNow(db, { ...scope, at, biases })).status === 'underway';
 	const rows = await limitRows(db, {
 		request,
 		owner: { ...owner, basisHash: owner.basisHash },
 		policy,
-		stored: (
-			await findDistributions(db, { ...scope, temperatureCelsius, interpolated: biases })
-		).filter(isAtFrequency),
-		isUnderway: between.status === 'underway',
+		stored:
+			request.biases === undefined
+				? atFrequency
+				: (
+						await findDistributions(db, { ...scope, temperatureCelsius, interpolated: biases })
+					).filter(isAtFrequency),
+		isUnderway,
 		unit,
 		biases,
 		frequency,

@@ -68,3 +68,12 @@ it('tells per cent before rounding, and the same digits as the same', () => {
 	expect(compareLimits('minimum', limit(1, '1'), null).difference).toBe('lost');
 	expect(compareLimits('minimum', null, null).difference).toBe('none');
 });
+
+it.each([
+	[{ same: 66 }, 'No printed limit changes.'],
+	[{ tighter: 13, looser: 1, same: 2 }, '13 limits tighten, 1 limit loosens; the others stay.'],
+	[{ lost: 2 }, '2 limits are refused or not promised.']
+])('sums up %j', (counts, text) => {
+	const none = { tighter: 0, looser: 0, gained: 0, lost: 0, same: 0 };
+	expect(limitsScreenMessages.differences({ ...none, ...counts })).toBe(text);
+});
