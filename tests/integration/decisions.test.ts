@@ -127,10 +127,8 @@ describe('a decision is refused', () => {
 		[{ minimum: '14,2' }, limitsScreenMessages.limitUnread('minimum')],
 		[{ minimum: '15.2' }, limitsScreenMessages.outOfOrder('minimum', 'typical')]
 	])('with %j', async (change, message) => {
-		expect(await decide(change)).toEqual({
-			status: 'refused',
-			message: expect.stringContaining(message)
-		});
+		const outcome = await decide(change);
+		expect(outcome.status === 'refused' && outcome.message).toContain(message);
 	});
 
 	it('when more devices lie outside than the basis allows, unless that is meant', async () => {

@@ -111,3 +111,12 @@ export function yieldText({ predicted, passed, of }: TestYield): string {
 	const share = `${fixed(predicted * 100, 1)}\u00a0% predicted`;
 	return passed === null ? share : `${passed} of ${of} stored devices, ${share}`;
 }
+
+/** What stands in the fields of a form, as its address would say it. */
+export function typedSearch(form: HTMLFormElement): URLSearchParams {
+	const typed = new URLSearchParams();
+	for (const [name, value] of new FormData(form)) {
+		if (typeof value === 'string') typed.append(name, value);
+	}
+	return typed;
+}

@@ -36,9 +36,8 @@ export function decideRow(
 	};
 	const [minimum, maximum] = [on('minimum'), on('maximum')];
 	const test = { minimum: minimum?.test?.value ?? null, maximum: maximum?.test?.value ?? null };
-	const { testYield: _, ...rest } = row;
 	return {
-		...rest,
+		...row,
 		minimum,
 		maximum,
 		...(test.minimum === null && test.maximum === null
