@@ -33,6 +33,7 @@ const PAGES: readonly (readonly [name: string, path: string, somebody: Somebody 
 	['template', '/templates/tuning', 'product'],
 	['library', '/library', 'reader'],
 	['people', '/administration/people', 'administrator'],
+	['policy', '/administration/policies/future-lots-99-95', 'administrator'],
 	['audit', '/administration/audit', 'administrator'],
 	['refused', '/administration/people', 'reader'],
 	['not-found', '/products/LKT-0000', 'product']

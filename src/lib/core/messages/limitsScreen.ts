@@ -32,6 +32,7 @@ export const limitsScreenMessages = {
 		if (said.length === 0) return 'No printed limit changes.';
 		return `${said.join(', ')}${of.same > 0 ? '; the others stay' : ''}.`;
 	},
+	sample: (devices: number, lots: number) => `${plural(devices, 'device')}, ${plural(lots, 'lot')}`,
 	needsDevices: (count: number) => `${plural(count, 'device')} a side would be needed.`,
 	withoutLots: (left: readonly string[], lots: number, devices: number) =>
 		`Without ${left.join(', ')} (${plural(lots, 'lot')} with ${plural(devices, 'device')} left).`,
