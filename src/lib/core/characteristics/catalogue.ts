@@ -131,7 +131,7 @@ export const CHARACTERISTICS = [
 	{
 		key: 'C_ratio',
 		symbol: { quantity: 'C', subscript: 'ratio' },
-		name: 'Capacitance ratio, device by device',
+		name: 'Capacitance ratio',
 		unit: '',
 		axes: ['frequency', 'reverseVoltage', 'secondReverseVoltage'],
 		measuredAs: 'derived',

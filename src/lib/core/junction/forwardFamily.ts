@@ -13,8 +13,11 @@ export type ForwardResult =
 	| { readonly status: 'fitted'; readonly fit: ForwardFit; readonly check: ForwardCheck | string }
 	| { readonly status: 'refused'; readonly reason: string };
 
-/** From so many saturation currents on the −1 of the diode law is less than 5 %. */
-const FAR_ABOVE = 20;
+/**
+ * From so many saturation currents on the −1 of the diode law is less than 0.1 %; from twenty on
+ * it would move n enough to add 4 % to the second R_s of a sweep made from the law.
+ */
+const FAR_ABOVE = 1000;
 
 /**
  * n, I_s and R_s of one forward curve by the fitted law, and n and R_s again by Cheung's functions

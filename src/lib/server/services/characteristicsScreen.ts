@@ -27,8 +27,8 @@ export interface CurrentFamily {
 
 /** The reverse current of one bias at several temperatures. */
 export interface LeakageByTemperature {
-	/** Without the temperature. */
-	readonly condition: Omit<Condition, 'temperatureCelsius'>;
+	/** In V. */
+	readonly reverseVoltage: number;
 	readonly points: readonly { readonly temperatureCelsius: number; readonly median: number }[];
 	/** Temperatures of which the median rests on censored readings. */
 	readonly leftOut: readonly number[];
@@ -118,10 +118,9 @@ function leakageOf(stored: readonly Stored[]): LeakageByTemperature[] {
 			temperatureCelsius: condition.temperatureCelsius,
 			median: medianOf(distribution)
 		}));
-		const { temperatureCelsius: _, ...condition } = first.condition;
 		return [
 			{
-				condition,
+				reverseVoltage: first.condition.reverseVoltage ?? 0,
 				points,
 				leftOut: series
 					.filter(({ distribution }) => isMedianBound(distribution))

@@ -5,7 +5,6 @@ import {
 } from '$lib/components/characteristics/characteristicRow';
 import { derivationOf, shownSide, spreadIn } from '$lib/components/limits/derivationOf';
 import { describePolicy } from '$lib/core/limits/describePolicy';
-import { conditionKey } from '$lib/core/characteristics/condition';
 import { limitMessages } from '$lib/core/messages/limits';
 import { requirePermission } from '$lib/server/auth/requirePermission';
 import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
@@ -66,11 +65,7 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 				? null
 				: derivationOf(shown.row, shownSide(url.searchParams), policy, shown.distribution),
 		families,
-		leakage: leakage.map(({ condition, ...rest }) => ({
-			...rest,
-			reverseVoltage: condition.reverseVoltage ?? 0,
-			key: conditionKey({ ...condition, temperatureCelsius: 0 })
-		}))
+		leakage
 	};
 };
 
