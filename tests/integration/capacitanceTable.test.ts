@@ -280,7 +280,8 @@ describe('the job', () => {
 			.from(audit)
 			.where(eq(audit.action, 'distributions.compute'));
 		expect(entries.length).toBeGreaterThanOrEqual(4);
-		expect(entries[0]?.details).toMatchObject({ sets: [setId], leftOut: 0, distributions: 8 });
+		// Four biases and the stored charge and energy at either temperature, and what lies between both.
+		expect(entries[0]?.details).toMatchObject({ sets: [setId], leftOut: 0, distributions: 13 });
 	});
 
 	it('changes nothing when nothing changed', async () => {
