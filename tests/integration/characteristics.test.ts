@@ -1,14 +1,18 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { forwardVoltage } from '$lib/core/junction/forwardCurrent';
 import type { LimitPolicy } from '$lib/core/limits/policy';
+import { packMatrix } from '$lib/core/measurements/blocks';
 import { limitMessages } from '$lib/core/messages/limits';
 import type { OpenDatabase } from '$lib/server/db/client';
-import { policyVersion } from '$lib/server/db/schema';
+import { policyVersion, sweepBlock } from '$lib/server/db/schema';
 import { write } from '$lib/server/db/write';
+import { findProductByPartNumber } from '$lib/server/db/findProductByPartNumber';
 import { bindEverything } from '$lib/server/services/bindEverything';
 import {
 	characteristicLimits,
 	type CharacteristicLimitsRequest
 } from '$lib/server/services/characteristicLimits';
+import { characteristicsScreen } from '$lib/server/services/characteristicsScreen';
 import { computeDistributions } from '$lib/server/services/computeDistributions';
 import { ensureOrganization } from '$lib/server/services/ensureOrganization';
 import { ensureTemplates } from '$lib/server/services/ensureTemplates';
@@ -62,6 +66,17 @@ const KNOWN: LimitPolicy = {
 	resolution: { significantFigures: 3 }
 };
 const POOLED: LimitPolicy = { ...KNOWN, name: 'Population 99/95', method: 'normal' };
+
+/** Bias in V and current in A with the sign of the bias: a diode law forward, 2 nA in reverse. */
+const LAW = { ideality: 1.1, saturationCurrent: 1e-12, seriesResistance: 0.7 };
+const FAMILY: readonly (readonly [number, number])[] = [
+	...Array.from({ length: 30 }, (_, i): readonly [number, number] => {
+		const current = 1e-8 * 10 ** (i / 4.5);
+		return [-forwardVoltage(LAW, current, 298.15), -current];
+	}),
+	[10, 1e-9],
+	[28, 2e-9]
+];
 
 let opened: OpenDatabase;
 let product = 0;
@@ -127,6 +142,32 @@ beforeAll(async () => {
 		values: leakage,
 		censored: atFloor
 	});
+	for (const [temperatureCelsius, values] of [
+		[85, devices.map(() => 20)],
+		[125, devices.map(() => 0.1)]
+	] as const) {
+		await insertReadings(db, set, {
+			characteristic: 'I_R',
+			condition: { temperatureCelsius, reverseVoltage: 28 },
+			unitScale: 1e-9,
+			values,
+			censored: devices.map(() => (temperatureCelsius === 125 ? -1 : 0))
+		});
+	}
+	await write(db, (tx) =>
+		tx.insert(sweepBlock).values({
+			set,
+			quantity: 'current',
+			conditionKey: 'T=25',
+			chunk: 0,
+			gridHash: 'currents',
+			grid: FAMILY.map(([bias]) => bias),
+			unitScale: 1,
+			values: Buffer.from(
+				packMatrix(Float64Array.from(devices.flatMap(() => FAMILY.map(([, current]) => current))))
+			)
+		})
+	);
 	await insertReadings(db, set, {
 		characteristic: 'r_s',
 		condition: { temperatureCelsius: 25, frequency: 470e6, reverseVoltage: 4 },
@@ -195,7 +236,9 @@ describe('the ratio C(1 V)/C(28 V)', () => {
 
 describe('leakage with four zeros among 75', () => {
 	it('counts them as at most 0.1 nA, and says so', async () => {
-		const { rows, distributions } = await limitsOf('I_R');
+		const { rows, distributions } = await limitsOf('I_R', {
+			unit: { unit: 'nA', unitScale: 1e-9 }
+		});
 		expect(distributions[0]?.distribution).toMatchObject({
 			sampleSize: 75,
 			censoring: { atOrBelow: 4, floor: 1e-10, atOrAbove: 0, ceiling: null }
@@ -232,6 +275,53 @@ describe('what is derived from several measurements', () => {
 
 	it('has no charge where nobody measured at 0 V', async () => {
 		await expect(limitsOf('Q_C')).rejects.toThrow('No distribution of Q_C is stored');
+	});
+});
+
+describe('the screen', () => {
+	const screen = async () => {
+		const found = await findProductByPartNumber(opened.db, 'LKT-1130');
+		return characteristicsScreen(opened.db, {
+			product,
+			basisHash: found?.basisHash ?? '',
+			policyVersion: policies.pooled,
+			declaredBasis: 'characterized'
+		});
+	};
+
+	it('has every reading and derived characteristic, and no device', async () => {
+		const { groups } = await screen();
+		expect(groups.map(({ characteristic }) => characteristic.key)).toEqual([
+			'V_F',
+			'I_R',
+			'r_s',
+			'C_ratio',
+			'Q',
+			'α_C'
+		]);
+	});
+
+	it('draws the median currents and extracts the law they were made by', async () => {
+		const [family, ...others] = (await screen()).families;
+		expect(others).toEqual([]);
+		expect(family).toMatchObject({ temperatureCelsius: 25, devices: COUNT });
+		expect(family?.reverse).toEqual([
+			[10, 1e-9],
+			[28, 2e-9]
+		]);
+		if (family?.extracted.status !== 'fitted') throw new Error('not fitted');
+		const { model } = family.extracted.fit;
+		expect(model.ideality).toBeCloseTo(1.1, 6);
+		expect(model.saturationCurrent / 1e-12).toBeCloseTo(1, 5);
+		expect(model.seriesResistance).toBeCloseTo(0.7, 6);
+	});
+
+	it('has an activation energy from two medians, without one that rests on censored readings', async () => {
+		const [leakage] = (await screen()).leakage;
+		expect(leakage?.leftOut).toEqual([125]);
+		// k·ln(20/1.85)/(1/298.15 − 1/358.15), k = 8.617333262e-5 eV/K: by hand.
+		const [k, cold, hot] = [8.617333262e-5, 1 / 298.15, 1 / 358.15];
+		expect(leakage?.energy).toBeCloseTo((k * Math.log(20 / 1.85)) / (cold - hot), 9);
 	});
 });
 
