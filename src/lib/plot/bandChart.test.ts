@@ -31,9 +31,9 @@ const data = (axes: BandChartData['axes']): BandChartData => ({
 
 /** Everything that stands under a key, anywhere in a specification. */
 function under(value: unknown, key: string): unknown[] {
-	if (Array.isArray(value)) return value.flatMap((each) => under(each, key));
+	if (Array.isArray(value)) return value.flatMap((each: unknown) => under(each, key));
 	if (typeof value !== 'object' || value === null) return [];
-	return Object.entries(value).flatMap(([name, of]) => [
+	return Object.entries(value).flatMap(([name, of]: [string, unknown]) => [
 		...(name === key ? [of] : []),
 		...under(of, key)
 	]);
