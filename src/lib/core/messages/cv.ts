@@ -25,18 +25,11 @@ export const cvMessages = {
 		'1/C² does not rise with reverse bias inside the window, or has fewer than three readings there. Choose another window.',
 	chargeFrom: (bias: number) =>
 		`Integrated from 0 V to ${bias} V, the highest bias measured, on the fitted law with the residuals added.`,
-	noChargeWithoutZero: () =>
-		'Nobody measured at 0 V, so charge and energy from 0 V on are not given.',
 	negativeComponent: () => 'A negative estimate is shown as 0.',
 	noComponents: () =>
 		'Shares need two lots or more, and a lot with two devices that differ. Measure further lots.',
 	noModel: () =>
 		'There are too few biases at this temperature and frequency to fit a SPICE model. Measure four or more.',
-	noDevices: (temperatureCelsius: number) =>
-		`Nothing is measured at ${String(temperatureCelsius).replace('-', '\u2212')} °C and this frequency.`,
-	missingCorner: (lot: string, condition: string) => `${lot}: not measured at ${condition}`,
-	partlyMeasured: (lot: string, condition: string, biases: number, of: number) =>
-		`${lot} at ${condition}: ${biases} of ${plural(of, 'bias', 'biases')}`,
 	moreLots: (count: number) => plural(count, 'further lot'),
 	moreDevices: (count: number) => plural(count, 'further device'),
 	enough: () => 'enough'
