@@ -132,6 +132,7 @@ describe('a line of readings', () => {
 		['A,3,D\ufffd,I_R,25,60,,1,nA,', measurementMessages.badBytes()],
 		['A,3,D1,I_X,25,60,,1,nA,', measurementMessages.characteristicUnknown('I_X')],
 		['A,3,D1,C_tot,25,4,,1,pF,', measurementMessages.characteristicSwept('C_tot')],
+		['A,3,D1,C_ratio,25,4,,1,pF,', measurementMessages.characteristicDerived('C_ratio')],
 		['A,3,D1,I_R,,60,,1,nA,', measurementMessages.notANumber('temperature', '')],
 		['A,3,D1,I_R,-300,60,,1,nA,', measurementMessages.temperatureBelowZero('-300')],
 		['A,3,D1,I_R,25,,,1,nA,', measurementMessages.conditionMissing('I_R', 'bias')],
