@@ -63,7 +63,7 @@ describe('the readings of the demo', () => {
 			['I_R T=85;VR=28', 'nA', 800],
 			['V_(BR) T=25;IR=0.00001', 'V', 800],
 			['V_F T=25;IF=0.01', 'V', 800],
-			['r_s T=25;f=470000000;VR=3', 'Ω', 800]
+			['r_s T=25;f=470000000;VR=4', 'Ω', 800]
 		]);
 		const [cold, hot, breakdown, forward, series] = found;
 		expect(cold?.bounds).toBeGreaterThan(0);
@@ -105,7 +105,7 @@ describe('the readings of the demo', () => {
 	it('are the same in every run', () => {
 		expect(openFile('LKR-2406_readings.csv').text).toBe(openFile('LKR-2406_readings.csv').text);
 		expect(openFile('LKT-1130_readings.csv').text.split('\n')[1]).toMatch(
-			/^LK24-031,03,X1Y1,D001,r_s,25,470,3,,,0\.\d{3},Ω,$/
+			/^LK24-031,03,X1Y1,D001,r_s,25,470,4,,,0\.\d{3},Ω,$/
 		);
 	});
 });

@@ -106,7 +106,7 @@ const TUNING_READINGS: ElectricalProduct = {
 			characteristic: 'r_s',
 			temperature: 25,
 			frequency: 470,
-			reverseVoltage: 3,
+			reverseVoltage: 4,
 			unit: 'Ω',
 			unitSize: 1,
 			decimals: 3,

@@ -22,8 +22,6 @@ interface DemoDraft {
 	readonly struckOut: Readonly<Record<string, string>>;
 }
 
-const NO_READINGS = 'No readings of this characteristic are stored yet.';
-
 export const DEMO_DRAFTS: readonly DemoDraft[] = [
 	{
 		partNumber: 'LKT-1130',
@@ -49,10 +47,8 @@ export const DEMO_DRAFTS: readonly DemoDraft[] = [
 			'ratings.storage-temperature': ['-55', '150', 'Mould compound.']
 		},
 		struckOut: {
-			'characteristics.reverse-current': NO_READINGS,
-			'characteristics.capacitance-ratio':
-				'Ratios are computed per device; no such set is stored yet.',
-			'characteristics.series-resistance': NO_READINGS
+			'characteristics.reverse-current':
+				'Some readings lie at the floor of the instrument, so that no limit for future lots can be computed.'
 		}
 	},
 	{
@@ -75,11 +71,7 @@ export const DEMO_DRAFTS: readonly DemoDraft[] = [
 			'ratings.junction-temperature': ['-55', '150', 'Mould compound and barrier metal.'],
 			'ratings.storage-temperature': ['-55', '150', 'Mould compound.']
 		},
-		struckOut: {
-			'characteristics.forward-voltage': NO_READINGS,
-			'characteristics.reverse-current': NO_READINGS,
-			'characteristics.thermal-resistance': NO_READINGS
-		}
+		struckOut: {}
 	}
 ];
 
