@@ -99,20 +99,8 @@ export class EvidenceSource {
 	async devicesAt(at: SweepCondition, bias: number): Promise<MeasuredDevices> {
 		const key = sweepKey(at);
 		const blocks = (await this.#blocksAt(key)).filter(({ grid }) => grid.includes(bias));
-		this.#leftOut ??= await this.#readLeftOut();
-		const leftOut = this.#leftOut;
-		const devices = readColumn(
-			blocks,
-			bias,
-			(set, row) => leftOut.has(`${set}/${row}/${key}`),
-			await this.#waferLots()
-		);
-		return {
-			devices,
-			independentLots: new Set(devices.map(({ waferLot }) => waferLot)).size,
-			uncertainty: await this.#uncertainty(new Set(blocks.map(({ set }) => set))),
-			censored: 0
-		};
+		const devices = readColumn(blocks, bias, await this.#isLeftOut(key), await this.#waferLots());
+		return this.#measured(devices, blocks);
 	}
 
 	/**
@@ -127,20 +115,9 @@ export class EvidenceSource {
 		const blocks = (await this.#blocksAt(key)).filter(({ grid }) =>
 			biases.some((bias) => grid.includes(bias))
 		);
-		this.#leftOut ??= await this.#readLeftOut();
-		const leftOut = this.#leftOut;
-		const devices = readRatio(
-			blocks,
-			biases,
-			(set, row) => leftOut.has(`${set}/${row}/${key}`),
-			await this.#waferLots()
-		);
-		return {
-			devices,
-			independentLots: new Set(devices.map(({ waferLot }) => waferLot)).size,
-			uncertainty: 2 * (await this.#uncertainty(new Set(blocks.map(({ set }) => set)))),
-			censored: 0
-		};
+		const devices = readRatio(blocks, biases, await this.#isLeftOut(key), await this.#waferLots());
+		const measured = await this.#measured(devices, blocks);
+		return { ...measured, uncertainty: 2 * measured.uncertainty };
 	}
 
 	/** The single readings of a characteristic at a condition, left out as above. */
@@ -167,25 +144,32 @@ export class EvidenceSource {
 					eq(readingBlock.conditionKey, conditionKeyText)
 				)
 			);
-		const blocks = rows.map(({ chunk, devices, ...rest }) => ({
-			...rest,
-			firstRow: chunk * ROWS_PER_BLOCK,
-			devices: deviceNames.parse(devices)
-		}));
-		this.#leftOut ??= await this.#readLeftOut();
-		const leftOut = this.#leftOut;
-		const key = `${characteristic} ${conditionKeyText}`;
+		const blocks = rows.map(placed);
 		const { devices, censored } = readReadings(
 			blocks,
-			(set, row) => leftOut.has(`${set}/${row}/${key}`),
+			await this.#isLeftOut(`${characteristic} ${conditionKeyText}`),
 			await this.#waferLots()
 		);
+		return this.#measured(devices, blocks, censored);
+	}
+
+	async #measured(
+		devices: readonly DeviceValue[],
+		blocks: readonly { readonly set: number }[],
+		censored = 0
+	): Promise<MeasuredDevices> {
 		return {
 			devices,
 			independentLots: new Set(devices.map(({ waferLot }) => waferLot)).size,
 			uncertainty: await this.#uncertainty(new Set(blocks.map(({ set }) => set))),
 			censored
 		};
+	}
+
+	async #isLeftOut(key: string): Promise<(set: number, row: number) => boolean> {
+		this.#leftOut ??= await this.#readLeftOut();
+		const leftOut = this.#leftOut;
+		return (set, row) => leftOut.has(`${set}/${row}/${key}`);
 	}
 
 	#accepted() {
@@ -216,11 +200,7 @@ export class EvidenceSource {
 					eq(sweepBlock.conditionKey, key)
 				)
 			);
-		const blocks = rows.map(({ chunk, devices, ...rest }) => ({
-			...rest,
-			firstRow: chunk * ROWS_PER_BLOCK,
-			devices: deviceNames.parse(devices)
-		}));
+		const blocks = rows.map(placed);
 		this.#blocks = { key, blocks };
 		return blocks;
 	}
@@ -267,6 +247,15 @@ export class EvidenceSource {
 			...stated.filter(({ id }) => sets.has(id)).map(({ uncertainty }) => uncertainty ?? 0)
 		);
 	}
+}
+
+/** A row of a table as a block, its devices named and numbered over their set. */
+function placed<Row extends { readonly chunk: number; readonly devices: unknown }>({
+	chunk,
+	devices,
+	...rest
+}: Row) {
+	return { ...rest, firstRow: chunk * ROWS_PER_BLOCK, devices: deviceNames.parse(devices) };
 }
 
 function sweepKey({ temperatureCelsius, frequency }: SweepCondition): string {
