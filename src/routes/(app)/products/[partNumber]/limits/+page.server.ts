@@ -63,6 +63,8 @@ export const load: PageServerLoad = async ({ locals, params, url, depends }) => 
 	const looked = conditions.find(({ key }) => key === at) ?? nearestToRoom(conditions);
 	const stored = { lots, basis, at: looked?.key ?? '' };
 	return {
+		/** Changes with what was asked, and stays over live updates. */
+		address: url.search,
 		progress: await limitsProgress(db, product),
 		choice: {
 			policy: policy?.id ?? null,
