@@ -2,11 +2,9 @@ import { eq } from 'drizzle-orm';
 import { conditionKey } from '$lib/core/characteristics/condition';
 import type { Basis } from '$lib/core/limits/basis';
 import { checkTable } from '$lib/core/limits/checkTable';
-import { computeLimitRow } from '$lib/core/limits/computeLimitRow';
 import type { CurveWidening } from '$lib/core/limits/curveWidening';
 import { engineVersion } from '$lib/core/limits/engineVersion';
 import type { LimitRow } from '$lib/core/limits/limit';
-import { limitInputText } from '$lib/core/limits/limitInput';
 import type { Side } from '$lib/core/limits/allowance';
 import { capacitanceUnit, type TableUnit } from '$lib/core/limits/tableUnit';
 import { medianOf } from '$lib/core/limits/typicalValue';
@@ -19,7 +17,7 @@ import { findPolicyVersion, type StoredPolicy } from '../db/findPolicies';
 import { product } from '../db/schema';
 import { enqueueWidening, storedWidening, type CurveOf } from './curveWidening';
 import { interpolateNow } from './interpolateNow';
-import { rememberedRows, rememberRows } from './limitMemo';
+import { rememberedLimits } from './rememberedLimits';
 import { CAPACITANCE } from './readBasis';
 import { sha256 } from './sha256';
 
@@ -130,10 +128,7 @@ export async function capacitanceTable(
 			policy,
 			{
 				...scope,
-				conditionKey: conditionKey({
-					temperatureCelsius,
-					...(frequency === undefined ? {} : { frequency })
-				}),
+				conditionKey: conditionKey(at),
 				sides: request.sides ?? ['minimum', 'maximum']
 			},
 			request.isKept
@@ -179,53 +174,21 @@ interface RowsWanted {
 }
 
 async function limitRows(db: Connection, wanted: RowsWanted): Promise<LimitRow[]> {
-	const { request, owner, policy, unit } = wanted;
-	const { declaredBasis = 'characterized', sides = ['minimum', 'maximum'] } = request;
-	const isTested = declaredBasis === 'tested' || policy.rules.guardBand !== undefined;
-	const inputs = wanted.stored.map(({ condition, distribution }) => ({
-		condition,
-		distribution,
-		inputHash: sha256(
-			limitInputText({
-				partNumber: owner.partNumber,
-				distribution,
-				...unit,
-				declaredBasis,
-				sides,
-				policyHash: policy.hash,
-				usesExtremes: policy.rules.method === 'order' || isTested,
-				widening: wanted.widening?.widening
-			})
-		)
-	}));
-	const byBias = new Map(inputs.map((input) => [input.condition.reverseVoltage, input]));
-	const asked = [...new Set(wanted.biases)].flatMap((bias) => byBias.get(bias) ?? []);
-	const known = await rememberedRows(
-		db,
-		policy.id,
-		asked.map(({ inputHash }) => inputHash)
+	const { request, owner, policy, unit, widening } = wanted;
+	const asked = wanted.stored.filter(({ condition }) =>
+		wanted.biases.includes(condition.reverseVoltage ?? Number.NaN)
 	);
-	const fresh = asked
-		.filter(({ inputHash }) => !known.has(inputHash))
-		.map(({ condition, distribution, inputHash }) =>
-			computeLimitRow(distribution, policy.rules, {
-				policyVersion: policy.id,
-				condition,
-				...unit,
-				inputHash,
-				sides,
-				declaredBasis,
-				widening: wanted.widening
-			})
-		);
-	if (request.isKept !== false) await rememberRows(db, fresh);
-	for (const row of fresh) known.set(row.inputHash, row);
-
-	return wanted.biases.map((bias) => {
-		const input = byBias.get(bias);
-		const row = input === undefined ? undefined : known.get(input.inputHash);
-		return row ?? notMeasured(bias, wanted);
+	const computed = await rememberedLimits(db, asked, {
+		partNumber: owner.partNumber,
+		policy,
+		unit,
+		declaredBasis: request.declaredBasis ?? 'characterized',
+		sides: request.sides ?? ['minimum', 'maximum'],
+		widening,
+		isKept: request.isKept
 	});
+	const byBias = new Map(computed.map((row) => [row.condition.reverseVoltage, row]));
+	return wanted.biases.map((bias) => byBias.get(bias) ?? notMeasured(bias, wanted));
 }
 
 function notMeasured(bias: number, wanted: RowsWanted): LimitRow {

@@ -6,10 +6,8 @@ import { matchConditions } from '$lib/core/characteristics/matchConditions';
 import type { Side } from '$lib/core/limits/allowance';
 import type { Basis } from '$lib/core/limits/basis';
 import { characteristicUnit } from '$lib/core/limits/characteristicUnit';
-import { computeLimitRow } from '$lib/core/limits/computeLimitRow';
 import { engineVersion } from '$lib/core/limits/engineVersion';
 import type { LimitRow } from '$lib/core/limits/limit';
-import { limitInputText } from '$lib/core/limits/limitInput';
 import type { TableUnit } from '$lib/core/limits/tableUnit';
 import { medianOf } from '$lib/core/limits/typicalValue';
 import { unmeasuredRow } from '$lib/core/limits/unmeasuredRow';
@@ -18,9 +16,9 @@ import { limitMessages } from '$lib/core/messages/limits';
 import type { Connection } from '../db/database';
 import { findCharacteristicDistributions } from '../db/findCharacteristicDistributions';
 import type { StoredDistribution } from '../db/findDistributions';
-import { findPolicyVersion, type StoredPolicy } from '../db/findPolicies';
+import { findPolicyVersion } from '../db/findPolicies';
 import { product } from '../db/schema';
-import { rememberedRows, rememberRows } from './limitMemo';
+import { rememberedLimits } from './rememberedLimits';
 import { sha256 } from './sha256';
 
 export interface CharacteristicLimitsRequest {
@@ -88,13 +86,16 @@ export async function characteristicLimits(
 		found: matchConditions(stored, asked)
 	}));
 	const chosen = places.flatMap(({ found }) => (found.length === 1 ? found : []));
-	const known = await rowsOf(db, chosen, {
-		request,
-		owner: { partNumber: owner.partNumber },
+	const computed = await rememberedLimits(db, chosen, {
+		partNumber: owner.partNumber,
 		policy,
-		characteristic,
-		unit
+		unit,
+		declaredBasis: request.declaredBasis ?? 'characterized',
+		sides: request.sides ?? characteristic.promised,
+		symbol: characteristic.key,
+		isKept: request.isKept
 	});
+	const known = new Map(computed.map((row) => [row.conditionKey, row]));
 	const rows = places.map(({ asked, found }): LimitRow => {
 		const [only] = found;
 		const row = found.length === 1 && only && known.get(conditionKey(only.condition));
@@ -133,64 +134,6 @@ function absence(
 		key,
 		describeCondition(asked),
 		stored.map(({ condition }) => describeCondition(condition))
-	);
-}
-
-/** The rows of these distributions by condition: read back where they were computed before. */
-async function rowsOf(
-	db: Connection,
-	stored: readonly StoredDistribution[],
-	by: {
-		readonly request: CharacteristicLimitsRequest;
-		readonly owner: { readonly partNumber: string };
-		readonly policy: StoredPolicy;
-		readonly characteristic: Characteristic;
-		readonly unit: TableUnit;
-	}
-): Promise<ReadonlyMap<string, LimitRow>> {
-	const { request, owner, policy, characteristic, unit } = by;
-	const { declaredBasis = 'characterized', sides = characteristic.promised } = request;
-	const isTested = declaredBasis === 'tested' || policy.rules.guardBand !== undefined;
-	const inputs = stored.map(({ condition, distribution }) => ({
-		condition,
-		distribution,
-		inputHash: sha256(
-			limitInputText({
-				partNumber: owner.partNumber,
-				distribution,
-				...unit,
-				declaredBasis,
-				sides,
-				policyHash: policy.hash,
-				usesExtremes: policy.rules.method === 'order' || isTested
-			})
-		)
-	}));
-	const known = await rememberedRows(
-		db,
-		policy.id,
-		inputs.map(({ inputHash }) => inputHash)
-	);
-	const fresh = inputs
-		.filter(({ inputHash }) => !known.has(inputHash))
-		.map(({ condition, distribution, inputHash }) =>
-			computeLimitRow(distribution, policy.rules, {
-				policyVersion: policy.id,
-				condition,
-				...unit,
-				inputHash,
-				sides,
-				declaredBasis,
-				symbol: characteristic.key
-			})
-		);
-	if (request.isKept !== false) await rememberRows(db, fresh);
-	for (const row of fresh) known.set(row.inputHash, row);
-	return new Map(
-		inputs.flatMap(({ condition, inputHash }) => {
-			const row = known.get(inputHash);
-			return row === undefined ? [] : [[conditionKey(condition), row] as const];
-		})
 	);
 }
 
